@@ -1,0 +1,42 @@
+import { defineConfig } from 'vitest/config';
+
+// Rooms are tested from their source; only what starts threads or processes runs the built `dist`.
+const conditions = ['spinassay-source'];
+const resolve = { conditions };
+const ssr = { resolve: { conditions } };
+
+export default defineConfig({
+  resolve,
+  ssr,
+  test: {
+    maxWorkers: 2,
+    reporters: ['default', './tests/closing-line-reporter.ts'],
+    projects: [
+      {
+        resolve,
+        ssr,
+        test: {
+          name: 'fast',
+          include: ['packages/*/src/**/*.test.ts', 'services/*/src/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
+          exclude: ['**/*.system.test.ts'],
+          testTimeout: 30_000,
+        },
+      },
+      {
+        resolve,
+        ssr,
+        test: {
+          name: 'system',
+          include: [
+            'tests/contract/**/*.test.ts',
+            'tests/end-to-end/**/*.test.ts',
+            'tests/accuracy/**/*.test.ts',
+            '{packages,services}/*/src/**/*.system.test.ts',
+          ],
+          testTimeout: 300_000,
+          hookTimeout: 120_000,
+        },
+      },
+    ],
+  },
+});
