@@ -12,13 +12,11 @@ export const slugSchema = z
   });
 
 /** A name that the service gave: ids of acquisitions and fits (RFC 9562). */
-export const serviceIdSchema = z
-  .uuid()
-  .meta({
-    id: 'ServiceId',
-    description: 'A UUID given by the service.',
-    examples: ['0190c3a2-7d55-7c11-9c5e-3f0d6b2f6a01'],
-  });
+export const serviceIdSchema = z.uuid().meta({
+  id: 'ServiceId',
+  description: 'A UUID given by the service.',
+  examples: ['0190c3a2-7d55-7c11-9c5e-3f0d6b2f6a01'],
+});
 
 /** SHA-256 in lower-case hexadecimal (FIPS 180-4). */
 export const sha256Schema = z

@@ -37,6 +37,10 @@ export {
 export { type Health, healthSchema, type Readiness, readinessSchema } from './health.ts';
 export { serviceIdSchema, sha256Schema, slugSchema, versionSchema } from './identifiers.ts';
 export { type Claim, claimSchema, type MethodBody, methodBodySchema, methodDefaults } from './method-body.ts';
+export { buildOpenApi } from './openapi/build-openapi.ts';
+export { openApiText } from './openapi/openapi-text.ts';
+export { type Operation, problemsOf } from './operations/operation.ts';
+export { type OperationId, operations } from './operations/operations.ts';
 export { type PreparationBody, preparationBodySchema } from './preparation-body.ts';
 export { type Problem, problemSchema } from './problem.ts';
 export {
@@ -50,6 +54,7 @@ export {
   releaseSchema,
 } from './recommendation.ts';
 export { type ResultBody, resultBodySchema, resultSchemaName } from './result-body.ts';
+export { isRole, type Role, roles } from './roles.ts';
 export { sha256Hex } from './sha256-hex.ts';
 export {
   type CouplingBody,

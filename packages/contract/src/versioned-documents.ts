@@ -12,32 +12,26 @@ const versionFields = {
   createdAt: timestampSchema,
 };
 
-export const compoundPostSchema = z
-  .strictObject({ id: slugSchema, body: compoundBodySchema })
-  .meta({
-    id: 'CompoundPost',
-    description: 'Version 1 of a compound, or its next version when the body differs from the latest.',
-  });
+export const compoundPostSchema = z.strictObject({ id: slugSchema, body: compoundBodySchema }).meta({
+  id: 'CompoundPost',
+  description: 'Version 1 of a compound, or its next version when the body differs from the latest.',
+});
 export const compoundSchema = z
   .strictObject({ ...versionFields, body: compoundBodySchema })
   .meta({ id: 'Compound', description: 'One version of a compound.' });
 
-export const methodPostSchema = z
-  .strictObject({ id: slugSchema, body: methodBodySchema })
-  .meta({
-    id: 'MethodPost',
-    description: 'Version 1 of a method, or its next version when the resolved body differs from the latest.',
-  });
+export const methodPostSchema = z.strictObject({ id: slugSchema, body: methodBodySchema }).meta({
+  id: 'MethodPost',
+  description: 'Version 1 of a method, or its next version when the resolved body differs from the latest.',
+});
 export const methodSchema = z
   .strictObject({ ...versionFields, body: methodBodySchema })
   .meta({ id: 'Method', description: 'One version of a method; every compound version in it is fixed.' });
 
-export const preparationPostSchema = z
-  .strictObject({ id: slugSchema, body: preparationBodySchema })
-  .meta({
-    id: 'PreparationPost',
-    description: 'Version 1 of a preparation, or its next version when the body differs from the latest.',
-  });
+export const preparationPostSchema = z.strictObject({ id: slugSchema, body: preparationBodySchema }).meta({
+  id: 'PreparationPost',
+  description: 'Version 1 of a preparation, or its next version when the body differs from the latest.',
+});
 export const preparationSchema = z
   .strictObject({ ...versionFields, body: preparationBodySchema })
   .meta({ id: 'Preparation', description: 'One version of a preparation.' });
