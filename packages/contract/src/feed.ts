@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { serviceIdSchema, sha256Schema, timestampSchema } from './identifiers.ts';
+import { serviceIdSchema, sha256Schema, slugSchema, timestampSchema, versionSchema } from './identifiers.ts';
+import { releaseSchema } from './recommendation.ts';
 
 /** Most and usual number of events in one page. */
 export const feedLimits = { max: 500, usual: 100 } as const;
@@ -10,6 +11,10 @@ export const feedEventSchema = z
     cursor: z.string().describe('Opaque; pass it as `after` to go on behind this event.'),
     kind: z.enum(['result']).describe('Further kinds will come; skip those you do not know.'),
     fitId: serviceIdSchema,
+    acquisitionId: serviceIdSchema,
+    methodId: slugSchema,
+    methodVersion: versionSchema,
+    recommendation: releaseSchema,
     resultSha256: sha256Schema,
     committedAt: timestampSchema,
   })

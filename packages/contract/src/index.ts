@@ -43,6 +43,7 @@ export { type Operation, problemsOf } from './operations/operation.ts';
 export { type OperationId, operations } from './operations/operations.ts';
 export { type PreparationBody, preparationBodySchema } from './preparation-body.ts';
 export { type Problem, problemSchema } from './problem.ts';
+export { emptyQuerySchema, feedQuerySchema, versionQuerySchema } from './queries.ts';
 export {
   type Reason,
   type ReasonCode,
@@ -56,6 +57,7 @@ export {
 export { type ResultBody, resultBodySchema, resultSchemaName } from './result-body.ts';
 export { isRole, type Role, roles } from './roles.ts';
 export { sha256Hex } from './sha256-hex.ts';
+export { type SignalScales, signalDigest } from './signal-digest.ts';
 export {
   type CouplingBody,
   couplingBodySchema,

@@ -31,3 +31,8 @@ test('refuses a window that ends before it begins', () => {
 test('refuses a prior width of zero, which would claim certainty', () => {
   expect(faultsOf({ panel: [{ compoundId: 'a', shiftSdPpm: 0 }] })).toEqual(['panel/0/shiftSdPpm']);
 });
+
+test('refuses a standard that nothing of the method would measure', () => {
+  expect(faultsOf({ standard: { compoundId: 'maleic-acid' } })).toEqual(['standard/compoundId']);
+  expect(faultsOf({ standard: { compoundId: 'acetate' } })).toEqual([]);
+});

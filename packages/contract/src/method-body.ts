@@ -87,10 +87,11 @@ export type MethodBody = z.infer<typeof methodBodySchema>;
 type Draft = {
   readonly panel: readonly { readonly compoundId: string }[];
   readonly claims: readonly string[];
-  readonly standard?: object | undefined;
+  readonly reference: { readonly compoundId: string };
+  readonly standard?: { readonly compoundId: string } | undefined;
 };
 
-/** A compound stands in the panel once, a claim is made once, and amounts need a standard. */
+/** A compound stands in the panel once, a claim is made once, amounts need a standard, and a standard is measured. */
 function checkMethod(method: Draft, context: z.core.$RefinementCtx<Draft>): void {
   const compounds = new Set<string>();
   method.panel.forEach(({ compoundId }, index) => {
@@ -105,6 +106,14 @@ function checkMethod(method: Draft, context: z.core.$RefinementCtx<Draft>): void
   });
   if (new Set(method.claims).size < method.claims.length) {
     context.addIssue({ code: 'custom', path: ['claims'], message: 'expected each claim once' });
+  }
+  const standardId = method.standard?.compoundId;
+  if (standardId !== undefined && standardId !== method.reference.compoundId && !compounds.has(standardId)) {
+    context.addIssue({
+      code: 'custom',
+      path: ['standard', 'compoundId'],
+      message: 'the standard is neither the reference nor in the panel',
+    });
   }
   if (method.claims.includes('amounts') && method.standard === undefined) {
     context.addIssue({ code: 'custom', path: ['standard'], message: 'amounts need a quantity standard' });

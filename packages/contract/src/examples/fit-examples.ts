@@ -36,7 +36,19 @@ export const fitExample: Fit = {
 };
 
 export const feedPageExample: FeedPage = {
-  events: [{ cursor: 'MTc', kind: 'result', fitId, resultSha256, committedAt: '2026-01-17T03:12:51.870Z' }],
+  events: [
+    {
+      cursor: 'MTc',
+      kind: 'result',
+      fitId,
+      acquisitionId: fitPostExample.acquisitionId,
+      methodId: fitPostExample.methodId,
+      methodVersion: 1,
+      recommendation: 'held',
+      resultSha256,
+      committedAt: '2026-01-17T03:12:51.870Z',
+    },
+  ],
   nextCursor: 'MTc',
   hasMore: false,
 };

@@ -64,14 +64,15 @@ function parametersOf(operation: Operation): Json[] {
   const inPath = operation.path.includes('{id}')
     ? [{ name: 'id', in: 'path', required: true, description: 'Id of the item.', schema: { type: 'string' } }]
     : [];
-  const others = (operation.parameters ?? []).map(({ name, in: place, description, schema }) => ({
-    name,
-    in: place,
-    required: false,
-    description,
-    schema: schemaObject(schema),
-  }));
-  return [...inPath, ...others];
+  const inQuery = Object.entries(operation.query?.shape ?? {}).map(([name, schema]) => {
+    const { description, ...object } = z.toJSONSchema(schema, { io: 'output' }) as Json;
+    const { $schema: _dialect, ...shape } = object;
+    return { name, in: 'query', required: false, description, schema: shape };
+  });
+  const inHeader = Object.entries(operation.requestHeaders ?? {}).map(([name, description]) => {
+    return { name, in: 'header', required: false, description, schema: { type: 'string' } };
+  });
+  return [...inPath, ...inQuery, ...inHeader];
 }
 
 function requestBody(request: NonNullable<Operation['request']>): Json {

@@ -1,5 +1,5 @@
 import type { ProblemSlug } from '@spinassay/problems';
-import { z } from 'zod';
+import type { z } from 'zod';
 import {
   compoundExample,
   compoundPostExample,
@@ -9,6 +9,7 @@ import {
   preparationExample,
   preparationPostExample,
 } from '../examples/document-examples.ts';
+import { versionQuerySchema } from '../queries.ts';
 import { type Role, roles } from '../roles.ts';
 import {
   compoundPostSchema,
@@ -125,14 +126,7 @@ function reading(operationId: string, kind: Kind): Operation {
     tag: kind.plural,
     summary: `Read a ${kind.noun}, the latest version unless another is named.`,
     roles,
-    parameters: [
-      {
-        name: 'version',
-        in: 'query',
-        description: 'The version; the latest when absent.',
-        schema: z.coerce.number().int().min(1).max(1_000_000).optional(),
-      },
-    ],
+    query: versionQuerySchema,
     answers: [
       {
         status: 200,

@@ -1,8 +1,8 @@
-import { z } from 'zod';
 import { feedPageExample, fitExample, fitPostExample, queuedFitExample } from '../examples/fit-examples.ts';
 import { resultBodyExample } from '../examples/result-example.ts';
-import { feedLimits, feedPageSchema } from '../feed.ts';
+import { feedPageSchema } from '../feed.ts';
 import { fitPostSchema, fitSchema } from '../fit.ts';
+import { feedQuerySchema } from '../queries.ts';
 import { resultBodySchema } from '../result-body.ts';
 import { roles } from '../roles.ts';
 import type { Operation } from './operation.ts';
@@ -51,20 +51,11 @@ export const fitOperations = {
     tag: 'fits',
     summary: 'Read how far a fit is. A failed fit is read with 200 and carries its problem.',
     roles,
-    parameters: [
-      {
-        name: 'Prefer',
-        in: 'header',
-        description: 'wait=N answers when the fit is final, or after N seconds, at most 30 (RFC 7240).',
-        schema: z.string().optional(),
-      },
-      {
-        name: 'If-None-Match',
-        in: 'header',
-        description: 'An ETag of this fit: 304 while nothing has changed (RFC 9110). With Prefer, waits for a change.',
-        schema: z.string().optional(),
-      },
-    ],
+    requestHeaders: {
+      Prefer: 'wait=N answers when the fit is final, or after N seconds, at most 30 (RFC 7240).',
+      'If-None-Match':
+        'An ETag of this fit: 304 while nothing has changed (RFC 9110). With Prefer, waits for a change.',
+    },
     answers: [
       {
         status: 200,
@@ -84,6 +75,7 @@ export const fitOperations = {
     tag: 'fits',
     summary: 'Read the result of a completed fit: always the same bytes.',
     roles,
+    requestHeaders: { 'If-None-Match': 'The ETag of this result: 304 (RFC 9110).' },
     answers: [
       {
         status: 200,
@@ -104,20 +96,7 @@ export const fitOperations = {
     tag: 'results',
     summary: 'Collect what happened to results since a cursor, in commit order, nothing skipped.',
     roles: ['lims', 'analyst', 'auditor', 'admin'],
-    parameters: [
-      {
-        name: 'after',
-        in: 'query',
-        description: 'Cursor of the last event that was taken; from the beginning when absent.',
-        schema: z.string().min(1).max(200).optional(),
-      },
-      {
-        name: 'limit',
-        in: 'query',
-        description: `Most events in the page; ${feedLimits.usual} when absent.`,
-        schema: z.coerce.number().int().min(1).max(feedLimits.max).optional(),
-      },
-    ],
+    query: feedQuerySchema,
     answers: [
       {
         status: 200,

@@ -20,14 +20,6 @@ export type OperationAnswer = {
   readonly headers?: Readonly<Record<string, string>>;
 };
 
-/** A query parameter or header, described for the reader and parsed by `schema`. */
-export type OperationParameter = {
-  readonly name: string;
-  readonly in: 'query' | 'header';
-  readonly description: string;
-  readonly schema: z.ZodType;
-};
-
 /** One operation of the interface: the server is routed by it and `openapi.yaml` is made from it. */
 export type Operation = {
   readonly operationId: string;
@@ -38,7 +30,10 @@ export type Operation = {
   readonly summary: string;
   /** Roles that may ask; `open` needs no key. */
   readonly roles: readonly Role[] | 'open';
-  readonly parameters?: readonly OperationParameter[];
+  /** Query parameters, each with a description; absent when the operation takes none. */
+  readonly query?: z.ZodObject;
+  /** Request headers beyond those of HTTP itself, with what they do. */
+  readonly requestHeaders?: Readonly<Record<string, string>>;
   readonly request?: OperationRequest;
   readonly answers: readonly OperationAnswer[];
   /** Failures beyond those that every operation shares (see `problemsOf`). */
