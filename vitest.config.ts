@@ -10,6 +10,8 @@ export default defineConfig({
   ssr,
   test: {
     maxWorkers: 2,
+    // One PostgreSQL for the run, started when the first test asks for a database.
+    globalSetup: ['./packages/store/test-support/one-postgres.ts'],
     reporters: ['default', './tests/closing-line-reporter.ts'],
     projects: [
       {
@@ -17,7 +19,12 @@ export default defineConfig({
         ssr,
         test: {
           name: 'fast',
-          include: ['packages/*/src/**/*.test.ts', 'services/*/src/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
+          include: [
+            'packages/*/src/**/*.test.ts',
+            'services/*/src/**/*.test.ts',
+            'deploy/postgres/**/*.test.ts',
+            'tests/architecture/**/*.test.ts',
+          ],
           exclude: ['**/*.system.test.ts'],
           testTimeout: 30_000,
         },
