@@ -12,7 +12,7 @@ export type OperationRequest = {
 
 /** One answer that is not a failure. */
 export type OperationAnswer = {
-  readonly status: 200 | 201 | 202 | 304 | 503;
+  readonly status: 200 | 201 | 202 | 301 | 304 | 503;
   readonly description: string;
   readonly mediaType?: string;
   readonly schema?: z.ZodType;

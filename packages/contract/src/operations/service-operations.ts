@@ -72,7 +72,10 @@ export const serviceOperations = {
     tag: 'service',
     summary: 'This description, as pages.',
     roles: 'open',
-    answers: [{ status: 200, description: 'HTML.', mediaType: 'text/html' }],
+    answers: [
+      { status: 200, description: 'HTML.', mediaType: 'text/html' },
+      { status: 301, description: 'The pages are at /docs/.', headers: { Location: 'Path of the pages.' } },
+    ],
     problems: [],
   },
   readProblemPage: {
