@@ -27,6 +27,8 @@ export default defineConfig({
           ],
           exclude: ['**/*.system.test.ts'],
           testTimeout: 30_000,
+          // The first that asks for a database waits for the server to be made.
+          hookTimeout: 60_000,
         },
       },
       {

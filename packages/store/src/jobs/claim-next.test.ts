@@ -1,32 +1,19 @@
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import {
-  createTestDatabase,
-  type SeededLaboratory,
-  seedLaboratory,
-  type TestDatabase,
-} from '../../test-support/index.ts';
-import { claimNext, handBack, openStore, openWorkerSession, type Store, type WorkerSession } from '../index.ts';
+import { type SeededLaboratory, seedLaboratory, storeForTests } from '../../test-support/index.ts';
+import { claimNext, handBack, openWorkerSession, type WorkerSession } from '../index.ts';
 
-let database: TestDatabase;
-let store: Store;
+const there = storeForTests();
 let worker: WorkerSession;
 let laboratory: SeededLaboratory;
 
 beforeAll(async () => {
-  database = await createTestDatabase();
-  const address = { connectionString: database.connectionString, applicationName: 'claim-next-test' };
-  store = openStore({ ...address, poolSize: 12 });
+  const address = { connectionString: there.connectionString, applicationName: 'claimer' };
   worker = await openWorkerSession(address, { label: 'test', wantedConcurrency: 1 });
-  laboratory = await seedLaboratory(store, 'claims');
+  laboratory = await seedLaboratory(there.store, 'claims');
 });
+afterAll(() => worker.close());
 
-afterAll(async () => {
-  await worker.close();
-  await store.close();
-  await database.drop();
-});
-
-const claim = () => claimNext(store, { workerId: worker.workerId, kinds: ['fit'], leaseSeconds: 60 });
+const claim = () => claimNext(there.store, { workerId: worker.workerId, kinds: ['fit'], leaseSeconds: 60 });
 
 test('claims each of 200 jobs once under 12 claimers at once, and then none', async () => {
   const asked: string[] = [];
@@ -46,10 +33,12 @@ test('gives the job that waited longest first', async () => {
   await claim();
 });
 
-test('leaves a job alone that is to wait', async () => {
-  await laboratory.askForFit('later');
+test('leaves a job alone that is to wait, and takes it up again with the next attempt once it is due', async () => {
+  const asked = await laboratory.askForFit('later');
   const job = await claim();
   if (job === undefined) throw new Error('nothing to claim');
-  await handBack(store, job.fence, { delaySeconds: 3_600, isForgiven: false });
+  await handBack(there.store, job.fence, { delaySeconds: 3_600, isForgiven: false });
   expect(await claim()).toBeUndefined();
+  await there.client.query('update job set not_before = clock_timestamp() where id = $1', [asked.id]);
+  expect((await claim())?.fence).toEqual({ jobId: asked.id, attempt: 2, laboratoryId: laboratory.laboratoryId });
 });

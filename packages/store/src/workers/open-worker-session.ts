@@ -1,5 +1,6 @@
 import { Client } from 'pg';
 import { advisoryClass, connectionSettings } from '../connection-settings.ts';
+import { isStoreUnavailable } from '../is-store-unavailable.ts';
 import { oneRow } from '../one-row.ts';
 
 export type WorkerDescription = {
@@ -11,7 +12,10 @@ export type WorkerDescription = {
 /** A worker as the database sees it: alive for as long as this connection holds its advisory lock. */
 export type WorkerSession = {
   readonly workerId: string;
-  /** Resolves when the connection is lost: the sweep will give the jobs to others. Open another session; unfinished work is fenced. */
+  /**
+   * Resolves when the connection is lost (never after `close`): the sweep will give the jobs to others. Open another session;
+   * unfinished work is fenced.
+   */
   readonly lost: Promise<Error>;
   /** Say how many jobs run, and hear how many should. */
   heartbeat(news: { readonly actualConcurrency: number }): Promise<{ wantedConcurrency: number }>;
@@ -25,9 +29,11 @@ export async function openWorkerSession(
   { label, wantedConcurrency }: WorkerDescription,
 ): Promise<WorkerSession> {
   const client = new Client(connectionSettings(address));
+  let isClosing = false;
   const lost = new Promise<Error>((resolve) => {
-    client.on('error', resolve);
-    client.on('end', () => resolve(new Error('the connection of the worker session ended')));
+    const tell = (error: Error) => void (isClosing || resolve(error));
+    client.on('error', tell);
+    client.on('end', () => tell(new Error('the connection of the worker session ended')));
   });
   await client.connect();
   try {
@@ -36,9 +42,13 @@ export async function openWorkerSession(
       workerId,
       lost,
       heartbeat: ({ actualConcurrency }) => beat(client, workerId, actualConcurrency),
-      close: () => leave(client, workerId),
+      close: () => {
+        isClosing = true;
+        return leave(client, workerId);
+      },
     };
   } catch (error) {
+    isClosing = true;
     await client.end();
     throw error;
   }
@@ -71,6 +81,9 @@ async function leave(client: Client, workerId: string): Promise<void> {
     await client.query('update worker set ended_at = clock_timestamp(), actual_concurrency = 0 where id = $1', [
       workerId,
     ]);
+  } catch (error) {
+    // Without its connection the worker counts as gone already; leaving must not fail for that.
+    if (!isStoreUnavailable(error)) throw error;
   } finally {
     await client.end();
   }
