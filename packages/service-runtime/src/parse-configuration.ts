@@ -22,6 +22,8 @@ export const knownKeys = [
   'SPINASSAY_REFERENCE_DATA_REQUIRED',
   'SPINASSAY_LOG_LEVEL',
   'SPINASSAY_FIT_CONCURRENCY',
+  'SPINASSAY_BASE_URL',
+  'SPINASSAY_HOST',
 ] as const;
 
 const ownPrefix = 'SPINASSAY_';

@@ -9,6 +9,8 @@ export const advisoryClass = { migration: 0x53410001, worker: 0x53410002, docume
 /**
  * Connection settings of every client: its name in the server's list, the schema, and an end to transactions that were
  * left open, because an open snapshot slows the feed's head row for everybody (510 to 351 transactions a second).
+ *
+ * The driver lets parameters of the connection string win: one with `options` of its own must set the search path itself.
  */
 export function connectionSettings(address: { connectionString: string; applicationName: string }): ClientConfig {
   return {
