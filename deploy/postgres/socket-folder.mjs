@@ -12,7 +12,7 @@ export async function socketFolderFor(homeFolder) {
   const isShort = Buffer.byteLength(inside) <= folderBytesMax;
   const folder = isShort ? inside : join(tmpdir(), `spinassay-${ownerId()}-${shortDigest(inside)}`);
   await mkdir(folder, { recursive: true, mode: 0o700 });
-  await refuseForeign(folder);
+  if (!isShort) await refuseForeign(folder);
   await chmod(folder, 0o700);
   return folder;
 }

@@ -1,5 +1,5 @@
 import { execFile, spawn } from 'node:child_process';
-import { chmod, chown, mkdir, open, readFile, rm } from 'node:fs/promises';
+import { chmod, chown, mkdir, open, readFile, rm, stat } from 'node:fs/promises';
 import { dirname, join, resolve } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { promisify } from 'node:util';
@@ -12,6 +12,8 @@ const superuser = 'spinassay';
 const startSecondsMax = 60;
 const stopSecondsMax = 60;
 const pollMilliseconds = 20;
+/** Permission of others to pass through a folder. */
+const passable = 0o001;
 
 /** Reached through a 0700 folder only; connection count is the budget of one machine (see the store's README). */
 const houseSettings = {
@@ -50,7 +52,7 @@ async function refuseOtherMajor(engine, dataFolder) {
 async function makeFolders(engine, { dataFolder, socketFolder }, { prefix, owner }) {
   for (const folder of [dataFolder, socketFolder]) {
     await mkdir(folder, { recursive: true, mode: 0o700 });
-    if (owner !== undefined) await chown(folder, owner.uid, owner.gid);
+    if (owner !== undefined) await handOver(folder, owner);
     await chmod(folder, 0o700);
   }
   if ((await majorOf(dataFolder)) !== undefined) return;
@@ -66,6 +68,14 @@ async function makeFolders(engine, { dataFolder, socketFolder }, { prefix, owner
     '--no-instructions',
   ];
   await run(...commandOf(prefix, join(engine.binFolder, 'initdb'), options));
+}
+
+/** Another user has to be let through the folder above, not into it. Folders further up are not ours to open. */
+async function handOver(folder, { uid, gid }) {
+  await chown(folder, uid, gid);
+  const above = dirname(folder);
+  const { mode } = await stat(above);
+  if ((mode & passable) === 0) await chmod(above, (mode & 0o7777) | passable);
 }
 
 const commandOf = (prefix, program, options) =>

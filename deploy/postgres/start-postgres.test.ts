@@ -57,6 +57,21 @@ describe.each(await enginesHere())('PostgreSQL $version ($kind)', (engine) => {
     await again.stop();
   });
 
+  test.runIf(process.getuid?.() === 0)('starts as another user where root may make no user namespace', async () => {
+    const path = process.env['PATH'];
+    await mkdir(join(home, 'bin'));
+    await writeFile(join(home, 'bin', 'unshare'), '#!/bin/sh\nexit 1\n', { mode: 0o755 });
+    try {
+      process.env['PATH'] = `${join(home, 'bin')}:${path}`;
+      const server = await start(engine);
+      expect((await stat(join(home, 'data'))).uid).not.toBe(0);
+      expect((await start(engine)).isStartedHere).toBe(false);
+      await server.stop();
+    } finally {
+      process.env['PATH'] = path;
+    }
+  });
+
   test('refuses the data of another major by name', async () => {
     await mkdir(join(home, 'data'));
     await writeFile(join(home, 'data', 'PG_VERSION'), '9\n');
