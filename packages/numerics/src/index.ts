@@ -1,5 +1,5 @@
 export { choleskyInto, choleskyLogDeterminant, choleskySolveInto } from './cholesky.ts';
-export { discreteFourierTransform } from './discrete-fourier-transform.ts';
+export { createFourierPlan, discreteFourierTransform, type FourierPlan } from './discrete-fourier-transform.ts';
 export { ConvergenceError, DimensionError, DomainError, type ErrorFacts } from './errors.ts';
 export { logSumExp } from './log-sum-exp.ts';
 export { normalCdf } from './normal-distribution.ts';

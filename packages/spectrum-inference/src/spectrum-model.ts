@@ -1,0 +1,288 @@
+import { type DampedLine, lineResponseInto } from '@spinassay/signal-processing';
+import type { BinWindow, BinWindows } from './bin-windows.ts';
+import { createSystemLines, type SystemLines } from './compound-lines.ts';
+import { createLineField, type LineField } from './line-field.ts';
+import type { ParameterLayout, SystemPlaces } from './parameter-layout.ts';
+
+/**
+ * The model of a spectrum: B_c = exp(i phase) sum over the lines of compound c of r_g w_lg G(f_l, R_g), in the bins of windows.
+ * Amounts multiply the columns B_c and are real (DESIGN section 4). Not shared between threads: it owns scratch.
+ */
+export interface SpectrumModel {
+  readonly layout: ParameterLayout;
+  /** Fill one column per compound, each (2 binCount), at the parameter values given. */
+  compoundColumnsInto(values: Float64Array, bins: BinWindows, columns: readonly Float64Array[]): void;
+  /** Fill d(sum_c amounts_c B_c)/d(value_p), one column per parameter. */
+  derivativeColumnsInto(
+    values: Float64Array,
+    amounts: Float64Array,
+    bins: BinWindows,
+    columns: readonly Float64Array[],
+  ): void;
+  /** All damped lines of the model at these values; weight in protons of one molecule. */
+  dampedLines(values: Float64Array): ModelLine[];
+  /** Give every line the share of the sample's field that acts on it, from the model at these values; used by intensity-broadening. */
+  freezeField(values: Float64Array, amounts: Float64Array): void;
+}
+
+export interface ModelLine {
+  readonly compound: number;
+  readonly frequencyHz: number;
+  readonly decayPerSecond: number;
+  readonly weight: number;
+}
+
+/** Group weights below this share of one proton are left out of the bins. */
+const WEIGHT_MIN = 1e-6;
+/** Derivatives of a line are evaluated in windows that reach within this distance of it; tails move the baseline only. */
+const DERIVATIVE_REACH_HZ = 25;
+
+/** Compile a model for a layout. Throws SystemTooLargeError for a spin system beyond the exact engine. */
+export function createSpectrumModel(layout: ParameterLayout): SpectrumModel {
+  const systems = layout.compounds.map((compound) => compound.spinSystems.map(createSystemLines));
+  let field: LineField = () => 0;
+  const contexts = (values: Float64Array, bins: BinWindows | undefined): SystemContext[] =>
+    systems.flatMap((list, compound) =>
+      list.map((system, s) => ({
+        layout,
+        system,
+        places: layout.places[compound][s],
+        compound,
+        values,
+        shiftsHz: shiftsHzOf(layout, compound, s, values),
+        couplingsHz: couplingsHzOf(layout, compound, s, values),
+        leadSamples: (bins?.firstSampleIndex ?? 0) - values[layout.timeZero],
+        field,
+      })),
+    );
+  return {
+    layout,
+    compoundColumnsInto(values, bins, columns) {
+      const value = new Float64Array(2 * bins.binCount);
+      for (const column of columns) column.fill(0);
+      for (const context of contexts(values, bins)) addSystemValues(context, bins, columns[context.compound], value);
+      for (const column of columns) rotateInPlace(column, values[layout.phase]);
+    },
+    derivativeColumnsInto(values, amounts, bins, columns) {
+      const scratch = { value: new Float64Array(2 * bins.binCount), slope: new Float64Array(2 * bins.binCount) };
+      for (const column of columns) column.fill(0);
+      for (const context of contexts(values, bins)) {
+        addSystemDerivatives(context, amounts[context.compound], bins, columns, scratch);
+      }
+      for (const column of columns) rotateInPlace(column, values[layout.phase]);
+    },
+    dampedLines(values) {
+      return contexts(values, undefined).flatMap(linesOf);
+    },
+    freezeField(values, amounts) {
+      const lines = contexts(values, undefined).flatMap(linesOf);
+      field = createLineField(
+        lines.map(({ frequencyHz, weight, compound }) => ({ frequencyHz, size: weight * amounts[compound] })),
+      );
+    },
+  };
+}
+
+interface SystemContext {
+  readonly layout: ParameterLayout;
+  readonly system: SystemLines;
+  readonly places: SystemPlaces;
+  readonly compound: number;
+  readonly values: Float64Array;
+  readonly shiftsHz: Float64Array;
+  readonly couplingsHz: Float64Array;
+  readonly leadSamples: number;
+  readonly field: LineField;
+}
+
+function shiftsHzOf(layout: ParameterLayout, compound: number, system: number, values: Float64Array): Float64Array {
+  const zero = layout.referencePosition < 0 ? layout.declaredZeroHz : values[layout.referencePosition];
+  const { shift } = layout.places[compound][system];
+  return Float64Array.from(layout.compounds[compound].spinSystems[system].groups, (_, g) =>
+    shift < 0 ? zero : zero + layout.hertzPerPpm * (values[shift + g] + values[layout.commonOffset]),
+  );
+}
+
+function couplingsHzOf(layout: ParameterLayout, compound: number, system: number, values: Float64Array): Float64Array {
+  const { coupling } = layout.places[compound][system];
+  return Float64Array.from(layout.compounds[compound].spinSystems[system].couplings, (_, j) => values[coupling + j]);
+}
+
+function linesOf(context: SystemContext): ModelLine[] {
+  const { system, compound, values, places } = context;
+  const groupCount = system.system.groups.length;
+  const lines: ModelLine[] = [];
+  system.isotopologues.forEach((isotopologue, i) => {
+    const table = system.lines(i, context.shiftsHz, context.couplingsHz);
+    const share = isotopologue.weight * system.system.copyCount;
+    for (let l = 0; l < table.lineCount; l += 1) {
+      const frequencyHz = table.frequencyHz[l];
+      for (let g = 0; g < groupCount; g += 1) {
+        const weight = table.groupWeight[l * groupCount + g] * share * values[places.response + g];
+        if (Math.abs(weight) < WEIGHT_MIN) continue;
+        lines.push({ compound, frequencyHz, weight, decayPerSecond: decayOf(context, g, frequencyHz) });
+      }
+    }
+  });
+  return lines;
+}
+
+function decayOf(context: SystemContext, group: number, frequencyHz: number): number {
+  const { layout, places, values, field } = context;
+  const decay = Math.exp(values[places.logDecay + group]);
+  if (layout.intensityBroadening < 0) return decay;
+  return Math.max(0, decay + values[layout.intensityBroadening] * field(frequencyHz));
+}
+
+function addSystemValues(context: SystemContext, bins: BinWindows, column: Float64Array, value: Float64Array): void {
+  const { system, places, values, leadSamples } = context;
+  const groupCount = system.system.groups.length;
+  const line: DampedLine = { frequencyHz: 0, decayPerSecond: 0, leadSamples };
+  for (let i = 0; i < system.isotopologues.length; i += 1) {
+    const table = system.lines(i, context.shiftsHz, context.couplingsHz);
+    const share = system.isotopologues[i].weight * system.system.copyCount;
+    for (let l = 0; l < table.lineCount; l += 1) {
+      line.frequencyHz = table.frequencyHz[l];
+      for (let g = 0; g < groupCount; g += 1) {
+        const weight = table.groupWeight[l * groupCount + g] * share * values[places.response + g];
+        if (Math.abs(weight) < bins.lineWeightMin) continue;
+        line.decayPerSecond = decayOf(context, g, line.frequencyHz);
+        for (const window of bins.windows) {
+          lineResponseInto(window.grid, line, value, undefined);
+          addScaled(column, 2 * window.offset, value, 2 * window.grid.binCount, weight);
+        }
+      }
+    }
+  }
+}
+
+interface Scratch {
+  readonly value: Float64Array;
+  readonly slope: Float64Array;
+}
+
+function addSystemDerivatives(
+  context: SystemContext,
+  amount: number,
+  bins: BinWindows,
+  columns: readonly Float64Array[],
+  scratch: Scratch,
+): void {
+  const { system, places, values, leadSamples, layout } = context;
+  const groupCount = system.system.groups.length;
+  const line: DampedLine = { frequencyHz: 0, decayPerSecond: 0, leadSamples };
+  for (let i = 0; i < system.isotopologues.length; i += 1) {
+    const table = system.linesWithDerivatives(i, context.shiftsHz, context.couplingsHz);
+    const share = system.isotopologues[i].weight * system.system.copyCount * amount;
+    for (let l = 0; l < table.lineCount; l += 1) {
+      line.frequencyHz = table.frequencyHz[l];
+      for (let g = 0; g < groupCount; g += 1) {
+        const weight = table.groupWeight[l * groupCount + g] * share;
+        const response = values[places.response + g];
+        if (Math.abs(weight) < bins.lineWeightMin * Math.abs(amount)) continue;
+        line.decayPerSecond = decayOf(context, g, line.frequencyHz);
+        for (const window of bins.windows) {
+          if (!isNear(window, line.frequencyHz)) continue;
+          lineResponseInto(window.grid, line, scratch.value, scratch.slope);
+          const size = 2 * window.grid.binCount;
+          const at = 2 * window.offset;
+          addScaled(columns[places.response + g], at, scratch.value, size, weight);
+          addRotated(columns[layout.phase], at, scratch.value, size, weight * response);
+          addLineSlopes(
+            context,
+            {
+              table,
+              l,
+              g,
+              share: share * response,
+              weight: weight * response,
+              line,
+              amount,
+              lineWeightMin: bins.lineWeightMin,
+            },
+            window,
+            columns,
+            scratch,
+          );
+        }
+      }
+    }
+  }
+}
+
+interface LineSlope {
+  readonly table: ReturnType<SystemLines['linesWithDerivatives']>;
+  readonly l: number;
+  readonly g: number;
+  readonly share: number;
+  readonly weight: number;
+  readonly line: DampedLine;
+  readonly amount: number;
+  readonly lineWeightMin: number;
+}
+
+/** Add one line's share to the derivative columns of everything that moves, widens or reweights it. */
+function addLineSlopes(
+  context: SystemContext,
+  { table, l, g, share, weight, line, amount, lineWeightMin }: LineSlope,
+  window: BinWindow,
+  columns: readonly Float64Array[],
+  { value, slope }: Scratch,
+): void {
+  const { system, places, values, layout, field } = context;
+  const groupCount = system.system.groups.length;
+  const couplingCount = system.system.couplings.length;
+  const derivativeCount = groupCount + couplingCount;
+  const at = 2 * window.offset;
+  const size = 2 * window.grid.binCount;
+  const turn = 2 * Math.PI;
+  const negligible = lineWeightMin * Math.abs(amount);
+  for (let p = 0; p < derivativeCount; p += 1) {
+    const isShift = p < groupCount;
+    if (isShift && places.shift < 0) continue;
+    const chain = isShift ? layout.hertzPerPpm : 1;
+    const column = columns[isShift ? places.shift + p : places.coupling + p - groupCount];
+    const weightSlope = table.groupWeightDerivative[(l * groupCount + g) * derivativeCount + p] * share * chain;
+    const frequencySlope = table.frequencyDerivative[l * derivativeCount + p] * weight * chain * turn;
+    if (Math.abs(weightSlope) > negligible * chain) addScaled(column, at, value, size, weightSlope);
+    if (Math.abs(frequencySlope) > negligible * chain) addRotated(column, at, slope, size, frequencySlope);
+  }
+  if (layout.referencePosition >= 0) addRotated(columns[layout.referencePosition], at, slope, size, weight * turn);
+  if (places.shift >= 0) addRotated(columns[layout.commonOffset], at, slope, size, weight * turn * layout.hertzPerPpm);
+  const groupDecay = Math.exp(values[places.logDecay + g]);
+  addScaled(columns[places.logDecay + g], at, slope, size, -weight * groupDecay);
+  if (layout.intensityBroadening >= 0) {
+    addScaled(columns[layout.intensityBroadening], at, slope, size, -weight * field(line.frequencyHz));
+  }
+  // d/d tau of exp(s (n0 - tau) dt) is -s dt, s = 2 pi i f - R.
+  const dwell = window.grid.dwellSeconds;
+  addScaled(columns[layout.timeZero], at, value, size, weight * dwell * line.decayPerSecond);
+  addRotated(columns[layout.timeZero], at, value, size, -weight * dwell * turn * line.frequencyHz);
+}
+
+function isNear(window: BinWindow, frequencyHz: number): boolean {
+  return frequencyHz > window.lowHz - DERIVATIVE_REACH_HZ && frequencyHz < window.highHz + DERIVATIVE_REACH_HZ;
+}
+
+function addScaled(out: Float64Array, at: number, column: Float64Array, size: number, factor: number): void {
+  for (let k = 0; k < size; k += 1) out[at + k] += factor * column[k];
+}
+
+/** Adds i times a real factor. */
+function addRotated(out: Float64Array, at: number, column: Float64Array, size: number, factor: number): void {
+  for (let k = 0; k < size; k += 2) {
+    out[at + k] -= factor * column[k + 1];
+    out[at + k + 1] += factor * column[k];
+  }
+}
+
+function rotateInPlace(column: Float64Array, phaseRadians: number): void {
+  const cos = Math.cos(phaseRadians);
+  const sin = Math.sin(phaseRadians);
+  for (let k = 0; k < column.length; k += 2) {
+    const re = column[k];
+    const im = column[k + 1];
+    column[k] = re * cos - im * sin;
+    column[k + 1] = re * sin + im * cos;
+  }
+}
