@@ -1,1 +1,3 @@
-export {};
+export type { CatalogueEntry } from './catalogue-entry.ts';
+export { findStarterCompound } from './find-starter-compound.ts';
+export { starterCatalogue } from './starter-catalogue.ts';
