@@ -64,6 +64,6 @@ export const importTable: Readonly<Record<string, ImportRule>> = {
     house: [...services, ...numericRooms],
     outside: [],
     node: true,
-    tests: ['@spinassay/signal-generator'],
+    tests: ['@spinassay/signal-generator', 'pg'],
   },
 };

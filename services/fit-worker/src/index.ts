@@ -1,1 +1,5 @@
-export {};
+export { createFitWorker, type FitWorker, type FitWorkerOptions } from './create-fit-worker.ts';
+export { engineVersion } from './identity/engine-version.ts';
+export { numericsId } from './identity/numerics-id.ts';
+export type { EngineIdentity } from './jobs/load-analysis-request.ts';
+export { type AnalysisThreads, createAnalysisThreads } from './threads/analysis-threads.ts';
