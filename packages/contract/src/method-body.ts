@@ -41,6 +41,14 @@ const windowSchema = z
   .refine((window) => window.lowPpm < window.highPpm, { path: ['highPpm'], message: 'expected highPpm > lowPpm' })
   .meta({ id: 'MethodWindow', description: 'A range of the spectrum that is analysed.' });
 
+const rangeSchema = z
+  .strictObject({ lowPpm: shiftPpmSchema, highPpm: shiftPpmSchema })
+  .refine((range) => range.lowPpm < range.highPpm, { path: ['highPpm'], message: 'expected highPpm > lowPpm' })
+  .meta({
+    id: 'ExcludedRegion',
+    description: 'A range of the spectrum in which signal is expected and not looked into.',
+  });
+
 const referenceSchema = z.strictObject({
   compoundId: slugSchema,
   compoundVersion: versionSchema.optional(),
@@ -63,6 +71,11 @@ export const methodBodySchema = z
     name: labelSchema,
     panel: z.array(panelEntrySchema).min(1).max(200),
     windows: z.array(windowSchema).min(1).max(200).optional().describe("Absent: made from the panel's shifts."),
+    excludedRegions: z
+      .array(rangeSchema)
+      .max(200)
+      .optional()
+      .describe("Ranges that nobody has to explain, beside the declared solvent's own."),
     reference: referenceSchema.describe('The compound in the tube that 0 ppm comes from.'),
     standard: z
       .strictObject({ compoundId: slugSchema })

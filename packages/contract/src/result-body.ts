@@ -61,7 +61,6 @@ const unexplainedSchema = z
     lowPpm: z.number(),
     highPpm: z.number(),
     significanceSigma: z.number(),
-    protonEquivalentFraction: z.number(),
   })
   .meta({ id: 'UnexplainedRegion', description: 'Signal that the model does not account for.' });
 
