@@ -1,1 +1,2 @@
-export {};
+export type { ApiDependencies } from './api-dependencies.ts';
+export { createApi } from './create-api.ts';
