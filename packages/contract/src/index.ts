@@ -8,6 +8,7 @@ export {
   signalBodySchema,
 } from './acquisition.ts';
 export { canonicalJson } from './canonical-json.ts';
+export { type CheckedShape, checkShape, type ShapeFault, type WireSchema, type WireValue } from './check-shape.ts';
 export { type CompoundBody, compoundBodySchema } from './compound-body.ts';
 export {
   type Amount,

@@ -1,5 +1,5 @@
+import { checkShape, type WireSchema, type WireValue } from '@spinassay/contract';
 import type { Request } from 'express';
-import type { z } from 'zod';
 import { problemWithFaults } from './problem-with-faults.ts';
 
 /**
@@ -7,13 +7,9 @@ import { problemWithFaults } from './problem-with-faults.ts';
  *
  * @throws ProblemError invalid-query with every fault at once
  */
-export function parseQuery<S extends z.ZodObject>(schema: S, request: Request): z.output<S> {
-  const parsed = schema.safeParse(request.query);
-  if (parsed.success) return parsed.data;
-  const faults = parsed.error.issues.flatMap((issue) =>
-    issue.code === 'unrecognized_keys'
-      ? issue.keys.map((parameter) => ({ parameter, detail: 'this parameter is not known here' }))
-      : [{ parameter: String(issue.path[0]), detail: issue.message }],
-  );
+export function parseQuery<S extends WireSchema>(schema: S, request: Request): WireValue<S> {
+  const checked = checkShape(schema, request.query);
+  if (checked.ok) return checked.value;
+  const faults = checked.faults.map(({ path, detail }) => ({ parameter: String(path[0]), detail }));
   throw problemWithFaults({ slug: 'invalid-query', subject: 'The query', faults });
 }

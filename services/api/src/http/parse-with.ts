@@ -1,5 +1,5 @@
-import { jsonPointer, type ProblemFault } from '@spinassay/problems';
-import type { z } from 'zod';
+import { checkShape, type WireSchema, type WireValue } from '@spinassay/contract';
+import { jsonPointer } from '@spinassay/problems';
 import { problemWithFaults } from './problem-with-faults.ts';
 
 /**
@@ -7,27 +7,9 @@ import { problemWithFaults } from './problem-with-faults.ts';
  *
  * @throws ProblemError invalid-body with every fault at once
  */
-export function parseWith<S extends z.ZodType>(schema: S, value: unknown): z.output<S> {
-  const parsed = schema.safeParse(value);
-  if (parsed.success) return parsed.data;
-  const faults = parsed.error.issues.flatMap(faultsOf);
+export function parseWith<S extends WireSchema>(schema: S, value: unknown): WireValue<S> {
+  const checked = checkShape(schema, value);
+  if (checked.ok) return checked.value;
+  const faults = checked.faults.map(({ path, detail }) => ({ pointer: jsonPointer(path), detail }));
   throw problemWithFaults({ slug: 'invalid-body', subject: 'The body', faults });
-}
-
-/** An unknown member is a fault of its own, at its own place; every other issue is one fault. */
-function faultsOf(issue: z.core.$ZodIssue): ProblemFault[] {
-  if (issue.code === 'unrecognized_keys') {
-    return issue.keys.map((key) => ({
-      pointer: jsonPointer([...issue.path, key]),
-      detail: 'this member is not known here',
-    }));
-  }
-  return [{ pointer: jsonPointer(issue.path), detail: sentenceOf(issue) }];
-}
-
-function sentenceOf(issue: z.core.$ZodIssue): string {
-  if (issue.code === 'invalid_type' && issue.message.endsWith('received undefined')) {
-    return `this member is missing: expected ${issue.expected}`;
-  }
-  return issue.message.replace(/^Invalid input: /, '');
 }

@@ -25,7 +25,7 @@ test.each([
 test('refuses a query parameter that it does not know', async () => {
   const response = await api.send('POST', '/v1/acquisitions?dryRun=1', { role: 'pipeline', body: '{}', headers });
   const problem = await expectProblem(response, 'invalid-query');
-  expect(problem.errors).toEqual([{ parameter: 'dryRun', detail: 'this parameter is not known here' }]);
+  expect(problem.errors).toEqual([{ parameter: 'dryRun', detail: 'this name is not known here' }]);
 });
 
 test('takes a client that leaves while it sends for no fault of ours', async () => {
