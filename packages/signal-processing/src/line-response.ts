@@ -50,15 +50,17 @@ export function createBinGrid(options: {
  *
  * @param value        (2 binCount) out, interleaved G_k
  * @param derivative   (2 binCount) out, interleaved dG_k/ds; undefined leaves it out
- * @cost O(binCount), no allocation
+ * @param bins        which bins to fill; others stay as they are
+ * @cost O(bins), no allocation
  */
 export function lineResponseInto(
   grid: BinGrid,
   line: DampedLine,
   value: Float64Array,
   derivative: Float64Array | undefined,
+  bins: { readonly start: number; readonly end: number } = { start: 0, end: grid.binCount },
 ): void {
-  const { rotation, binCount, sampleCount, dwellSeconds } = grid;
+  const { rotation, sampleCount, dwellSeconds } = grid;
   const { frequencyHz, decayPerSecond, leadSamples } = line;
   // z and z^M share the exponent (s - kappa) dt, real part `decay`, imaginary part `turn`.
   const decay = -(decayPerSecond + grid.softWindowPerSecond) * dwellSeconds;
@@ -81,7 +83,7 @@ export function lineResponseInto(
   const ratioIm = endIm * open;
   const bRe = leadSamples * dwellSeconds - sampleCount * dwellSeconds * ratioRe;
   const bIm = -sampleCount * dwellSeconds * ratioIm;
-  for (let k = 0; k < binCount; k += 1) {
+  for (let k = bins.start; k < bins.end; k += 1) {
     const uRe = rotation[2 * k];
     const uIm = rotation[2 * k + 1];
     const zuRe = zRe * uRe - zIm * uIm;

@@ -9,7 +9,7 @@ import { type LocatedReference, locateReference } from './locate-reference.ts';
 import { logBayesFactors, weighModes } from './mode-posterior.ts';
 import { modelSignal } from './model-signal.ts';
 import { createParameterLayout, type LayoutPriors, parameterValues } from './parameter-layout.ts';
-import { type FoundMode, type SearchHooks, type SearchReport, searchModes } from './population-search.ts';
+import { type SearchHooks, type SearchReport, searchModes } from './population-search.ts';
 import type { WeightedMode } from './posterior-estimate.ts';
 import type { RungContext } from './rung-fit.ts';
 import { searchWindows, windowsRoundLines } from './search-windows.ts';
@@ -84,12 +84,14 @@ function conclude(findings: Findings): SpectrumAnswer {
   const { question, context, signal, search, noise, zeroHz } = findings;
   const { layout } = context.model;
   const wideBins = rungBins(signal, 0, findings.rangesAt(0));
-  const wide = weighModes(context, wideBins, search.modes);
+  const isOwnWindows = question.windows.length > 0;
+  // Where windows are narrowed afterwards, the whole range serves presence alone: the best mode is enough.
+  const wide = weighModes(context, wideBins, isOwnWindows ? search.modes : search.modes.slice(0, 1));
   const logBayes = logBayesFactors(context, wide);
   const present = layout.compounds.map((_, c) => c === layout.referenceIndex || (logBayes[c] ?? 0) > PLAINLY_PRESENT);
-  const isNarrowed = question.windows.length === 0 && present.some((is, c) => is && c !== layout.referenceIndex);
+  const isNarrowed = !isOwnWindows && present.some((is, c) => is && c !== layout.referenceIndex);
   const bins = isNarrowed ? narrowBins(findings, wide, present) : wideBins;
-  const modes = isNarrowed ? weighModes(context, bins, asModes(wide)) : wide;
+  const modes = isNarrowed ? weighModes(context, bins, search.modes) : wide;
   const best = modes[0].posterior;
   const toPpm = (hz: number): number => (hz - zeroHz) / question.hertzPerPpm;
   return {
@@ -188,10 +190,6 @@ function insideWidth(ranges: readonly WindowRange[], dwellSeconds: number): Wind
   return ranges
     .map((range) => ({ ...range, lowHz: Math.max(-edge, range.lowHz), highHz: Math.min(edge, range.highHz) }))
     .filter((range) => range.highHz > range.lowHz);
-}
-
-function asModes(modes: readonly WeightedMode[]): Pick<FoundMode, 'standardised'>[] {
-  return modes.map((mode) => ({ standardised: mode.posterior.fit.standardised }));
 }
 
 function narrowBins(findings: Findings, modes: readonly WeightedMode[], present: readonly boolean[]): BinWindows {

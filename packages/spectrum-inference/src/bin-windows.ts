@@ -21,6 +21,8 @@ export interface BinWindows {
   readonly binSpacingHz: number;
   /** Lines of less weight, in protons, are left out of these bins. */
   readonly lineWeightMin: number;
+  /** Lines further from a window than this are left to its baseline, Hz. */
+  readonly valueReachHz: number;
   /** n0: index in the FID of the first sample used. */
   readonly firstSampleIndex: number;
   /** (2 binCount) interleaved data. */
@@ -40,6 +42,8 @@ export interface SpectrumSampling {
   readonly firstSampleIndex: number;
   readonly softWindowPerSecond: number;
   readonly lineWeightMin: number;
+  /** See BinWindows. */
+  readonly valueReachHz: number;
 }
 
 /**
@@ -73,8 +77,8 @@ export function cutBinWindows(
     });
     offset += binCount;
   }
-  const { firstSampleIndex, lineWeightMin } = sampling;
-  const bins = { windows, binCount: offset, binSpacingHz: spacing, firstSampleIndex, lineWeightMin };
+  const { firstSampleIndex, lineWeightMin, valueReachHz } = sampling;
+  const bins = { windows, binCount: offset, binSpacingHz: spacing, firstSampleIndex, lineWeightMin, valueReachHz };
   return { ...bins, data: pickBins(bins, spectrum) };
 }
 

@@ -25,9 +25,16 @@ export interface SystemLines {
   readonly system: SpinSystemQuestion;
   readonly isotopologues: readonly Isotopologue[];
   /** The lines of isotopologue i at the shifts and couplings given. */
-  lines(isotopologue: number, shiftsHz: Float64Array, couplingsHz: Float64Array): TransitionTable;
+  lines(isotopologue: number, at: SystemPoint): TransitionTable;
   /** The same with derivatives by every shift, then every coupling. */
-  linesWithDerivatives(isotopologue: number, shiftsHz: Float64Array, couplingsHz: Float64Array): TransitionDerivatives;
+  linesWithDerivatives(isotopologue: number, at: SystemPoint): TransitionDerivatives;
+}
+
+/** Where a system is evaluated, and the weight, in protons, below which its lines are dropped. */
+export interface SystemPoint {
+  readonly shiftsHz: Float64Array;
+  readonly couplingsHz: Float64Array;
+  readonly lineWeightMin: number;
 }
 
 /** Compile a spin system. Throws SystemTooLargeError beyond the limit of the exact engine. */
@@ -47,18 +54,14 @@ export function createSystemLines(system: SpinSystemQuestion): SystemLines {
   return {
     system,
     isotopologues,
-    lines(isotopologue, shiftsHz, couplingsHz) {
-      computeTransitionsInto(compiled, move(isotopologue, shiftsHz), couplingsHz, workspace, table);
+    lines(isotopologue, { shiftsHz, couplingsHz, lineWeightMin }) {
+      const shifts = move(isotopologue, shiftsHz);
+      computeTransitionsInto(compiled, shifts, couplingsHz, workspace, table, lineWeightMin);
       return table;
     },
-    linesWithDerivatives(isotopologue, shiftsHz, couplingsHz) {
-      computeTransitionsWithDerivativesInto(
-        compiled,
-        move(isotopologue, shiftsHz),
-        couplingsHz,
-        workspace,
-        derivatives,
-      );
+    linesWithDerivatives(isotopologue, { shiftsHz, couplingsHz, lineWeightMin }) {
+      const shifts = move(isotopologue, shiftsHz);
+      computeTransitionsWithDerivativesInto(compiled, shifts, couplingsHz, workspace, derivatives, lineWeightMin);
       return derivatives;
     },
   };

@@ -4,10 +4,10 @@ export const EPS_PRIOR_SCALE = 0.01;
 /** Coarse ladder of eps: 0, then geometric up to beyond any lineshape. */
 const EPS_MIN = 3e-4;
 const EPS_MAX = 0.6;
-const COARSE_STEP = 1.6;
+const COARSE_STEP = 2.5;
 /** Fine ladder about the best coarse point: a few sd of ln eps at some hundred bins. */
-const FINE_STEP = 1.06;
-const FINE_REACH = 9;
+const FINE_STEP = 1.1;
+const FINE_REACH = 8;
 
 /** The coarse grid, rising from 0. */
 export function coarseEpsGrid(): number[] {

@@ -34,9 +34,10 @@ export interface SizeComponent {
 /** eps assumed before it is judged. */
 const START_EPS = 0.05;
 /** Rounds of judging the sizes and stepping to the mode they give. */
-const ROUNDS_MAX = 12;
-/** Settled: a Newton step that would gain less than this, nats, under the judged noise. */
+const ROUNDS_MAX = 16;
+/** Rounds end when a Newton step would gain less than this, nats; the mode counts as found below the second figure. */
 const SETTLED_GAIN = 0.05;
+const CONVERGED_GAIN = 0.5;
 /** Longest step of one standardised parameter a round. */
 const STEP_MAX = 1;
 /** Components of less weight say nothing. */
@@ -57,15 +58,17 @@ export function discrepancyPosterior(
 ): DiscrepancyPosterior {
   const linear = (place: FitPlace): LinearisedFit => linearise(context.model, bins, context.signal, place);
   let fit = linear(firstPlace(context, bins, start));
-  let judged = judge(context, fit, [START_EPS]);
+  let judged = judge(context, fit, judgedSystems(context, fit, [START_EPS]));
   let evaluationCount = 2;
-  let converged = false;
-  for (let round = 0; round < ROUNDS_MAX && !converged; round += 1) {
+  let gain = Number.POSITIVE_INFINITY;
+  for (let round = 0; round < ROUNDS_MAX && gain > SETTLED_GAIN; round += 1) {
     fit = linear(stepped(fit, judged.top.posterior));
-    judged = judge(context, fit, undefined);
+    judged = judge(context, fit, judgedSystems(context, fit, coarseEpsGrid()));
     evaluationCount += 1;
-    converged = gainOf(judged.top.posterior) < SETTLED_GAIN;
+    gain = gainOf(judged.top.posterior);
   }
+  const fine = judgedSystems(context, fit, fineEpsGrid(judged.top.eps));
+  judged = judge(context, fit, { ...fine, systems: [...judged.systems, ...fine.systems] });
   const { components, logEvidence, noise } = judged;
   const mean = (of: (component: SizeComponent) => number): number =>
     components.reduce((sum, c) => sum + c.weight * of(c), 0);
@@ -78,13 +81,12 @@ export function discrepancyPosterior(
     epsMean,
     epsSd: Math.sqrt(mean((c) => (c.eps - epsMean) * (c.eps - epsMean))),
     envelopeSdMean: mean((c) => c.envelopeSd),
-    converged,
+    converged: gain < CONVERGED_GAIN,
     evaluationCount,
   };
 }
 
-interface Judged {
-  readonly noise: ProportionalNoise;
+interface Judged extends JudgedSystems {
   readonly components: readonly SizeComponent[];
   readonly top: SizeComponent;
   readonly logEvidence: number;
@@ -106,33 +108,33 @@ function firstPlace(context: RungContext, bins: BinWindows, start: Float64Array)
   return { standardised: start, amounts, envelope: new Float64Array(ENVELOPE_COLUMN_COUNT) };
 }
 
-/** Weigh the grids of both sizes; `only` restricts eps. */
-function judge(context: RungContext, fit: LinearisedFit, only: readonly number[] | undefined): Judged {
+interface JudgedSystems {
+  readonly noise: ProportionalNoise;
+  readonly systems: readonly GramSystem[];
+}
+
+function judgedSystems(context: RungContext, fit: LinearisedFit, grid: readonly number[]): JudgedSystems {
   const noise = { noiseSd: context.noiseSd, localModel: localModelMagnitude(fit.bins, modelOf(fit)) };
-  const systems = (only ?? coarseEpsGrid()).map((eps) => gramSystem(fit, noise, eps));
-  const at = (system: GramSystem): Omit<SizeComponent, 'weight'>[] =>
-    ENVELOPE_SD_GRID.map(({ sd }) => ({
-      eps: system.eps,
-      envelopeSd: sd,
-      posterior: normalPosterior(fit, system, { amountSd: context.amountSd, envelopeSd: sd, without: [] }),
-    }));
-  if (only === undefined) {
-    const best = systems.flatMap(at).reduce((a, b) => (b.posterior.logEvidence > a.posterior.logEvidence ? b : a));
-    systems.push(...fineEpsGrid(best.eps).map((eps) => gramSystem(fit, noise, eps)));
-    systems.sort((a, b) => a.eps - b.eps);
-  }
+  return { noise, systems: grid.map((eps) => gramSystem(fit, noise, eps)) };
+}
+
+/** Weigh both sizes on the grid of eps that the systems stand for. */
+function judge({ amountSd }: RungContext, fit: LinearisedFit, judged: JudgedSystems): Judged {
+  const systems = [...judged.systems].sort((a, b) => a.eps - b.eps);
   const epsMass = logEpsMass(systems.map((system) => system.eps));
   const points = systems.flatMap((system, i) =>
-    at(system).map((point, j) => ({
-      point,
-      logWeight: point.posterior.logEvidence + epsMass[i] + ENVELOPE_SD_GRID[j].logMass,
-    })),
+    ENVELOPE_SD_GRID.map(({ sd, logMass }) => {
+      const posterior = normalPosterior(fit, system, { amountSd, envelopeSd: sd, without: [] });
+      const logWeight = posterior.logEvidence + epsMass[i] + logMass;
+      return { eps: system.eps, envelopeSd: sd, posterior, logWeight };
+    }),
   );
   const logEvidence = logSumExp(Float64Array.from(points, ({ logWeight }) => logWeight));
   const components = points
-    .map(({ point, logWeight }) => ({ ...point, weight: Math.exp(logWeight - logEvidence) }))
+    .map(({ logWeight, ...point }) => ({ ...point, weight: Math.exp(logWeight - logEvidence) }))
     .filter((component) => component.weight > WEIGHT_MIN);
-  return { noise, components, top: components.reduce((a, b) => (b.weight > a.weight ? b : a)), logEvidence };
+  const top = components.reduce((a, b) => (b.weight > a.weight ? b : a));
+  return { ...judged, systems, components, top, logEvidence };
 }
 
 /** The place the posterior's step leads to, shortened where it leaves the reach of the linear model. */

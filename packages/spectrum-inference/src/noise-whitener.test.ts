@@ -6,7 +6,14 @@ import { createProportionalWhitener, localModelMagnitude, MODEL_ERROR_SUPPORT_HZ
 import { dot } from './spectrum-fit.ts';
 
 const random = createRandomStream({ seed: 11n, purpose: 'whitener test' });
-const sampling = { sampleCount: 1000, dwellSeconds: 1 / 700, firstSampleIndex: 16, softWindowPerSecond: 0 };
+const sampling = {
+  sampleCount: 1000,
+  dwellSeconds: 1 / 700,
+  firstSampleIndex: 16,
+  softWindowPerSecond: 0,
+  lineWeightMin: 0,
+  valueReachHz: 1e9,
+};
 const spectrum = Float64Array.from({ length: 2000 }, () => random.nextNormal());
 const bins = cutBinWindows(spectrum, sampling, [
   { lowHz: -20, highHz: 3, baselineTermCount: 2 },

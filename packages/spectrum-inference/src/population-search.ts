@@ -2,9 +2,11 @@ import type { RandomStream } from '@spinassay/numerics';
 import { createRandomStream } from '@spinassay/numerics';
 import type { WindowRange } from './bin-windows.ts';
 import { proposeMove } from './discrete-moves.ts';
-import type { ParameterLayout } from './parameter-layout.ts';
-import { alignPhase, fitRung, type RungContext } from './rung-fit.ts';
+import { type ParameterLayout, parameterValues } from './parameter-layout.ts';
+import { repairMoves } from './repair-moves.ts';
+import { alignPhase, fitRung, type RungContext, scoreOnBins } from './rung-fit.ts';
 import { isSameMode } from './same-mode.ts';
+import { intersectRanges, windowsRoundLines } from './search-windows.ts';
 import { ROUTINE_LADDER_PER_SECOND, rungBins, searchLineWeightMin, type UsableSignal } from './time-ladder.ts';
 
 /** A search that may be watched and stopped between steps. */
@@ -43,6 +45,15 @@ export interface SearchReport {
 const MEMBER_COUNT = 5;
 const POPULATIONS_MIN = 2;
 const POPULATIONS_MAX = 5;
+/** Members that a population hands on. */
+const KEPT_AT_END = 3;
+/** Rounds of discrete changes on an ever better member, and what one must gain, nats: exchangeable labels gain nothing. */
+const REPAIR_ROUNDS_MAX = 3;
+const REPAIR_GAIN_MIN = 0.5;
+/** Rungs from here down look at narrowed windows; these reach this far about lines of at least this weight, in protons. */
+const NARROW_FROM_PER_SECOND = 3;
+const NARROW_MARGIN_HZ = 25;
+const NARROW_LINE_WEIGHT_MIN = 0.01;
 /** Modes further than this behind the best are dropped, nats (INFERENCE step 7). */
 const MODE_DEPTH = 15;
 
@@ -50,7 +61,7 @@ const MODE_DEPTH = 15;
 function selectionAt(softWindowPerSecond: number): { kept: number; varied: number } {
   if (softWindowPerSecond > 10) return { kept: MEMBER_COUNT, varied: 0 };
   if (softWindowPerSecond > 1) return { kept: 3, varied: 3 };
-  return { kept: 2, varied: 1 };
+  return { kept: 2, varied: 0 };
 }
 
 /** Raised between two steps when the caller asked to stop. */
@@ -64,32 +75,21 @@ export class SearchCancelled extends Error {
  * @source Aldous & Vazirani, FOCS 1994; Grassberger, Comput. Phys. Commun. 147 (2002) 64; INFERENCE.md
  */
 export function searchModes(request: SearchRequest, hooks: SearchHooks): SearchReport {
-  const { layout } = request.context.model;
-  const modes: FoundMode[] = [];
-  let evaluationCount = 0;
+  const effort: Effort = { evaluationCount: 0 };
+  const ends: { member: Member; population: number }[] = [];
+  let modes: FoundMode[] = [];
   let population = 0;
   let isAgreed = false;
   while (population < POPULATIONS_MIN || (!isAgreed && population < POPULATIONS_MAX)) {
-    const outcome = runPopulation(request, population, (fraction) => {
+    const members = runPopulation(request, population, effort, (fraction) => {
       if (hooks.isCancelled()) throw new SearchCancelled('the search was cancelled');
       hooks.onProgress(Math.min(1, (population + fraction) / POPULATIONS_MIN));
     });
-    evaluationCount += outcome.evaluationCount;
-    const claimed = new Set<FoundMode>();
-    for (const member of outcome.members) {
-      const known = modes.find((mode) => isSameMode(layout, mode, member));
-      if (known === undefined) {
-        const mode = { ...member, populationCount: 1 };
-        modes.push(mode);
-        claimed.add(mode);
-      } else if (!claimed.has(known)) {
-        known.populationCount += 1;
-        claimed.add(known);
-      }
-    }
-    modes.sort((a, b) => a.score - b.score);
+    for (const member of members) ends.push({ member, population });
+    modes = gatherModes(request, ends);
+    effort.evaluationCount += ends.length;
     population += 1;
-    isAgreed = (modes.at(0)?.populationCount ?? 0) >= 2;
+    isAgreed = modes[0].populationCount >= 2;
   }
   const best = modes[0].score;
   return {
@@ -97,7 +97,7 @@ export function searchModes(request: SearchRequest, hooks: SearchHooks): SearchR
     isAgreed,
     populationCount: population,
     startCount: population * MEMBER_COUNT,
-    evaluationCount,
+    evaluationCount: effort.evaluationCount,
   };
 }
 
@@ -107,32 +107,73 @@ interface Member {
   readonly score: number;
 }
 
+/** Ends of all populations, scored on the same bins, as distinct modes, best first. */
+function gatherModes(request: SearchRequest, ends: readonly { member: Member; population: number }[]): FoundMode[] {
+  const { context, signal } = request;
+  const everyone = ends.map(({ member }) => member);
+  const bins = rungBins(signal, 0, narrowedRanges(request, 0, everyone), searchLineWeightMin(0));
+  const scored = ends.map(({ member, population }) => ({
+    ...member,
+    population,
+    score: scoreOnBins(context, bins, member.standardised),
+  }));
+  scored.sort((a, b) => a.score - b.score);
+  const modes: (FoundMode & { populations: Set<number> })[] = [];
+  for (const { population, ...end } of scored) {
+    const known = modes.find((mode) => isSameMode(context.model.layout, mode, end));
+    if (known === undefined) modes.push({ ...end, populations: new Set([population]), populationCount: 1 });
+    else {
+      known.populations.add(population);
+      known.populationCount = known.populations.size;
+    }
+  }
+  return modes.map(({ populations: _, ...mode }) => mode);
+}
+
+/** Counts evaluations over a search. */
+interface Effort {
+  evaluationCount: number;
+}
+
+/** Fits one start on one rung; the widest lines of the ladder are cut once a rung. */
+type FitOnRung = (start: Float64Array) => Member;
+
+function rungFitter(
+  request: SearchRequest,
+  softWindow: number,
+  ranges: readonly WindowRange[],
+  effort: Effort,
+): FitOnRung {
+  const bins = rungBins(request.signal, softWindow, ranges, searchLineWeightMin(softWindow));
+  const isFirst = softWindow === ROUTINE_LADDER_PER_SECOND[0];
+  return (start) => {
+    const aligned = isFirst && !request.isPhaseKnown ? alignPhase(request.context, bins, start) : start;
+    const result = fitRung(request.context, bins, aligned);
+    effort.evaluationCount += result.evaluationCount;
+    return result;
+  };
+}
+
 function runPopulation(
   request: SearchRequest,
   population: number,
+  effort: Effort,
   onStep: (fraction: number) => void,
-): { members: Member[]; evaluationCount: number } {
-  const { context, signal } = request;
-  const { layout } = context.model;
+): Member[] {
+  const { layout } = request.context.model;
   const stream = (purpose: string, member: number): RandomStream =>
     createRandomStream({ seed: request.seed, purpose, population, member });
-  let evaluationCount = 0;
+  let members: Member[] = [];
   let starts = Array.from({ length: MEMBER_COUNT }, (_, m) =>
     population === 0 && m === 0
       ? new Float64Array(layout.parameters.length)
       : drawFromPrior(layout, stream('start', m)),
   );
-  let members: Member[] = [];
   ROUTINE_LADDER_PER_SECOND.forEach((softWindow, rung) => {
-    const bins = rungBins(signal, softWindow, request.rangesAt(softWindow), searchLineWeightMin(softWindow));
-    const fit = (start: Float64Array): Member => {
-      const result = fitRung(context, bins, start);
-      evaluationCount += result.evaluationCount;
-      return result;
-    };
+    const fit = rungFitter(request, softWindow, rangesOf(request, softWindow, members), effort);
     members = starts.map((start, m) => {
       onStep((rung + m / starts.length) / ROUTINE_LADDER_PER_SECOND.length);
-      return fit(rung === 0 && !request.isPhaseKnown ? alignPhase(context, bins, start) : start);
+      return fit(start);
     });
     const { kept, varied } = selectionAt(softWindow);
     if (kept < MEMBER_COUNT) {
@@ -143,7 +184,57 @@ function runPopulation(
     }
     starts = members.map((member) => member.standardised);
   });
-  return { members, evaluationCount };
+  return repaired(request, members, effort, onStep);
+}
+
+/**
+ * Try, one after the other, every discrete change of the best member that its priors allow, whether or not a residual shows:
+ * single signs and permutations leave next to none (SEARCH section 1).
+ */
+function repaired(
+  request: SearchRequest,
+  members: readonly Member[],
+  effort: Effort,
+  onStep: (fraction: number) => void,
+): Member[] {
+  const { layout } = request.context.model;
+  const narrow = rungFitter(request, 0, narrowedRanges(request, 0, members), effort);
+  let best = narrow(members[0].standardised);
+  for (let round = 0; round < REPAIR_ROUNDS_MAX; round += 1) {
+    const before = best;
+    for (const change of repairMoves(layout, before.standardised)) {
+      onStep(1);
+      const changed = narrow(change);
+      if (changed.score < best.score - REPAIR_GAIN_MIN) best = changed;
+    }
+    if (best === before) return [...members];
+  }
+  const found = [...members, best];
+  return distinctBest(layout, found, KEPT_AT_END);
+}
+
+/**
+ * Windows of a rung. While members are apart the whole prior range is looked at; from 3 per second on the surroundings of where
+ * any of them stands are enough to sharpen and compare them.
+ */
+function rangesOf({ context, rangesAt }: SearchRequest, softWindow: number, members: readonly Member[]): WindowRange[] {
+  if (softWindow > NARROW_FROM_PER_SECOND || members.length === 0) return [...rangesAt(softWindow)];
+  return narrowedRanges({ context, rangesAt }, softWindow, members);
+}
+
+function narrowedRanges(
+  { context, rangesAt }: Pick<SearchRequest, 'context' | 'rangesAt'>,
+  softWindow: number,
+  members: readonly Member[],
+): WindowRange[] {
+  const { layout } = context.model;
+  const near = members.flatMap((member) =>
+    context.model
+      .dampedLines(parameterValues(layout, member.standardised))
+      .filter((line) => Math.abs(line.weight) > NARROW_LINE_WEIGHT_MIN)
+      .map((line) => line.frequencyHz),
+  );
+  return intersectRanges(windowsRoundLines(near, NARROW_MARGIN_HZ, layout.hertzPerPpm), rangesAt(softWindow));
 }
 
 function distinctBest(layout: ParameterLayout, members: readonly Member[], count: number): Member[] {

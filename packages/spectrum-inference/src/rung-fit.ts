@@ -65,6 +65,18 @@ export function fitRung(context: RungContext, bins: BinWindows, start: Float64Ar
   return { standardised, amounts, score, evaluationCount };
 }
 
+/** Score of a place on some bins without climbing: amounts at their best, the noise of each window profiled out. */
+export function scoreOnBins(context: RungContext, bins: BinWindows, standardised: Float64Array): number {
+  const precision = priorPrecision(context.model.layout, SEARCH_EPS);
+  const even = new Float64Array(bins.windows.length).fill(context.noiseSd);
+  const { model, amountSd } = context;
+  const point = evaluateFit(
+    { model, bins, whitener: createWhiteWhitener(bins, even), precision, amountSd },
+    standardised,
+  );
+  return profileScore(bins, unwhiten(bins, point.residual, even), context, precision, point);
+}
+
 /** Turn the phase so that the strongest compound's complex amplitude is real and positive; for searches without a phase prior. */
 export function alignPhase(context: RungContext, bins: BinWindows, start: Float64Array): Float64Array {
   const { layout } = context.model;

@@ -104,3 +104,14 @@ function mergeRanges(ranges: readonly RawRange[], hertzPerPpm: number, softWindo
     return { lowHz, highHz, baselineTermCount };
   });
 }
+
+/** The parts of some windows that lie inside others; baseline terms as in the narrower ones. */
+export function intersectRanges(narrow: readonly WindowRange[], wide: readonly WindowRange[]): WindowRange[] {
+  return narrow.flatMap((range) =>
+    wide.flatMap((limit) => {
+      const lowHz = Math.max(range.lowHz, limit.lowHz);
+      const highHz = Math.min(range.highHz, limit.highHz);
+      return highHz > lowHz ? [{ ...range, lowHz, highHz }] : [];
+    }),
+  );
+}

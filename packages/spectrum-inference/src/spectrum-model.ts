@@ -51,6 +51,7 @@ export function createSpectrumModel(layout: ParameterLayout): SpectrumModel {
         values,
         shiftsHz: shiftsHzOf(layout, compound, s, values),
         couplingsHz: couplingsHzOf(layout, compound, s, values),
+        lineWeightMin: bins?.lineWeightMin ?? WEIGHT_MIN,
         leadSamples: (bins?.firstSampleIndex ?? 0) - values[layout.timeZero],
         field,
       })),
@@ -91,6 +92,7 @@ interface SystemContext {
   readonly values: Float64Array;
   readonly shiftsHz: Float64Array;
   readonly couplingsHz: Float64Array;
+  readonly lineWeightMin: number;
   readonly leadSamples: number;
   readonly field: LineField;
 }
@@ -113,7 +115,7 @@ function linesOf(context: SystemContext): ModelLine[] {
   const groupCount = system.system.groups.length;
   const lines: ModelLine[] = [];
   system.isotopologues.forEach((isotopologue, i) => {
-    const table = system.lines(i, context.shiftsHz, context.couplingsHz);
+    const table = system.lines(i, context);
     const share = isotopologue.weight * system.system.copyCount;
     for (let l = 0; l < table.lineCount; l += 1) {
       const frequencyHz = table.frequencyHz[l];
@@ -139,7 +141,7 @@ function addSystemValues(context: SystemContext, bins: BinWindows, column: Float
   const groupCount = system.system.groups.length;
   const line: DampedLine = { frequencyHz: 0, decayPerSecond: 0, leadSamples };
   for (let i = 0; i < system.isotopologues.length; i += 1) {
-    const table = system.lines(i, context.shiftsHz, context.couplingsHz);
+    const table = system.lines(i, context);
     const share = system.isotopologues[i].weight * system.system.copyCount;
     for (let l = 0; l < table.lineCount; l += 1) {
       line.frequencyHz = table.frequencyHz[l];
@@ -148,8 +150,9 @@ function addSystemValues(context: SystemContext, bins: BinWindows, column: Float
         if (Math.abs(weight) < bins.lineWeightMin) continue;
         line.decayPerSecond = decayOf(context, g, line.frequencyHz);
         for (const window of bins.windows) {
+          if (bins.valueReachHz < distance(window, line.frequencyHz)) continue;
           lineResponseInto(window.grid, line, value, undefined);
-          addScaled(column, 2 * window.offset, value, 2 * window.grid.binCount, weight);
+          addScaled(column, 2 * window.offset, value, 0, 2 * window.grid.binCount, weight);
         }
       }
     }
@@ -168,11 +171,11 @@ function addSystemDerivatives(
   columns: readonly Float64Array[],
   scratch: Scratch,
 ): void {
-  const { system, places, values, leadSamples, layout } = context;
+  const { system, places, values, leadSamples } = context;
   const groupCount = system.system.groups.length;
   const line: DampedLine = { frequencyHz: 0, decayPerSecond: 0, leadSamples };
   for (let i = 0; i < system.isotopologues.length; i += 1) {
-    const table = system.linesWithDerivatives(i, context.shiftsHz, context.couplingsHz);
+    const table = system.linesWithDerivatives(i, context);
     const share = system.isotopologues[i].weight * system.system.copyCount * amount;
     for (let l = 0; l < table.lineCount; l += 1) {
       line.frequencyHz = table.frequencyHz[l];
@@ -181,96 +184,114 @@ function addSystemDerivatives(
         const response = values[places.response + g];
         if (Math.abs(weight) < bins.lineWeightMin * Math.abs(amount)) continue;
         line.decayPerSecond = decayOf(context, g, line.frequencyHz);
+        const slope = { table, l, g, share: share * response, weight: weight * response, line, amount, response };
         for (const window of bins.windows) {
-          if (!isNear(window, line.frequencyHz)) continue;
-          lineResponseInto(window.grid, line, scratch.value, scratch.slope);
-          const size = 2 * window.grid.binCount;
-          const at = 2 * window.offset;
-          addScaled(columns[places.response + g], at, scratch.value, size, weight);
-          addRotated(columns[layout.phase], at, scratch.value, size, weight * response);
-          addLineSlopes(
-            context,
-            {
-              table,
-              l,
-              g,
-              share: share * response,
-              weight: weight * response,
-              line,
-              amount,
-              lineWeightMin: bins.lineWeightMin,
-            },
-            window,
-            columns,
-            scratch,
-          );
+          const stretch = stretchNear(window, bins, line.frequencyHz);
+          if (stretch.start >= stretch.end) continue;
+          lineResponseInto(window.grid, line, scratch.value, scratch.slope, stretch);
+          addLineSlopes(context, slope, { window, stretch, ...scratch }, columns);
         }
       }
     }
   }
 }
 
+/** The bins of a window within reach of a line; soft lines reach further. */
+function stretchNear(window: BinWindow, bins: BinWindows, frequencyHz: number): { start: number; end: number } {
+  const reach = DERIVATIVE_REACH_HZ + window.grid.softWindowPerSecond;
+  const place = (hz: number): number => Math.ceil(hz / bins.binSpacingHz) - window.firstBin;
+  return {
+    start: Math.max(0, place(frequencyHz - reach)),
+    end: Math.min(window.grid.binCount, place(frequencyHz + reach)),
+  };
+}
+
 interface LineSlope {
   readonly table: ReturnType<SystemLines['linesWithDerivatives']>;
   readonly l: number;
   readonly g: number;
+  /** Amount times copies, isotopologue and response. */
   readonly share: number;
+  /** The line's weight times share. */
   readonly weight: number;
+  readonly response: number;
   readonly line: DampedLine;
   readonly amount: number;
-  readonly lineWeightMin: number;
+}
+
+interface EvaluatedStretch extends Scratch {
+  readonly window: BinWindow;
+  readonly stretch: { readonly start: number; readonly end: number };
 }
 
 /** Add one line's share to the derivative columns of everything that moves, widens or reweights it. */
 function addLineSlopes(
   context: SystemContext,
-  { table, l, g, share, weight, line, amount, lineWeightMin }: LineSlope,
-  window: BinWindow,
+  { table, l, g, share, weight, response, line, amount }: LineSlope,
+  { window, stretch, value, slope }: EvaluatedStretch,
   columns: readonly Float64Array[],
-  { value, slope }: Scratch,
 ): void {
-  const { system, places, values, layout, field } = context;
+  const { system, places, values, layout, field, lineWeightMin } = context;
   const groupCount = system.system.groups.length;
-  const couplingCount = system.system.couplings.length;
-  const derivativeCount = groupCount + couplingCount;
-  const at = 2 * window.offset;
-  const size = 2 * window.grid.binCount;
+  const derivativeCount = groupCount + system.system.couplings.length;
   const turn = 2 * Math.PI;
   const negligible = lineWeightMin * Math.abs(amount);
+  const from = 2 * stretch.start;
+  const to = 2 * stretch.end;
+  const at = 2 * window.offset;
+  const add = (place: number, column: Float64Array, factor: number): void =>
+    addScaled(columns[place], at, column, from, to, factor);
+  const addTurned = (place: number, column: Float64Array, factor: number): void =>
+    addRotated(columns[place], at, column, from, to, factor);
   for (let p = 0; p < derivativeCount; p += 1) {
     const isShift = p < groupCount;
     if (isShift && places.shift < 0) continue;
     const chain = isShift ? layout.hertzPerPpm : 1;
-    const column = columns[isShift ? places.shift + p : places.coupling + p - groupCount];
+    const place = isShift ? places.shift + p : places.coupling + p - groupCount;
     const weightSlope = table.groupWeightDerivative[(l * groupCount + g) * derivativeCount + p] * share * chain;
     const frequencySlope = table.frequencyDerivative[l * derivativeCount + p] * weight * chain * turn;
-    if (Math.abs(weightSlope) > negligible * chain) addScaled(column, at, value, size, weightSlope);
-    if (Math.abs(frequencySlope) > negligible * chain) addRotated(column, at, slope, size, frequencySlope);
+    if (Math.abs(weightSlope) > negligible * chain) add(place, value, weightSlope);
+    if (Math.abs(frequencySlope) > negligible * chain) addTurned(place, slope, frequencySlope);
   }
-  if (layout.referencePosition >= 0) addRotated(columns[layout.referencePosition], at, slope, size, weight * turn);
-  if (places.shift >= 0) addRotated(columns[layout.commonOffset], at, slope, size, weight * turn * layout.hertzPerPpm);
-  const groupDecay = Math.exp(values[places.logDecay + g]);
-  addScaled(columns[places.logDecay + g], at, slope, size, -weight * groupDecay);
-  if (layout.intensityBroadening >= 0) {
-    addScaled(columns[layout.intensityBroadening], at, slope, size, -weight * field(line.frequencyHz));
-  }
+  if (layout.referencePosition >= 0) addTurned(layout.referencePosition, slope, weight * turn);
+  if (places.shift >= 0) addTurned(layout.commonOffset, slope, weight * turn * layout.hertzPerPpm);
+  add(places.logDecay + g, slope, -weight * Math.exp(values[places.logDecay + g]));
+  if (layout.intensityBroadening >= 0) add(layout.intensityBroadening, slope, -weight * field(line.frequencyHz));
+  add(places.response + g, value, weight / response);
+  addTurned(layout.phase, value, weight);
   // d/d tau of exp(s (n0 - tau) dt) is -s dt, s = 2 pi i f - R.
   const dwell = window.grid.dwellSeconds;
-  addScaled(columns[layout.timeZero], at, value, size, weight * dwell * line.decayPerSecond);
-  addRotated(columns[layout.timeZero], at, value, size, -weight * dwell * turn * line.frequencyHz);
+  add(layout.timeZero, value, weight * dwell * line.decayPerSecond);
+  addTurned(layout.timeZero, value, -weight * dwell * turn * line.frequencyHz);
 }
 
-function isNear(window: BinWindow, frequencyHz: number): boolean {
-  return frequencyHz > window.lowHz - DERIVATIVE_REACH_HZ && frequencyHz < window.highHz + DERIVATIVE_REACH_HZ;
+/** How far a frequency lies outside a window, Hz; 0 inside. */
+function distance(window: BinWindow, frequencyHz: number): number {
+  return Math.max(0, window.lowHz - frequencyHz, frequencyHz - window.highHz);
 }
 
-function addScaled(out: Float64Array, at: number, column: Float64Array, size: number, factor: number): void {
-  for (let k = 0; k < size; k += 1) out[at + k] += factor * column[k];
+/** out += factor column over the reals from...to of a window whose first real in `out` is `at`. */
+function addScaled(
+  out: Float64Array,
+  at: number,
+  column: Float64Array,
+  from: number,
+  to: number,
+  factor: number,
+): void {
+  for (let k = from; k < to; k += 1) out[at + k] += factor * column[k];
 }
 
-/** Adds i times a real factor. */
-function addRotated(out: Float64Array, at: number, column: Float64Array, size: number, factor: number): void {
-  for (let k = 0; k < size; k += 2) {
+/** The same with i times a real factor. */
+function addRotated(
+  out: Float64Array,
+  at: number,
+  column: Float64Array,
+  from: number,
+  to: number,
+  factor: number,
+): void {
+  for (let k = from; k < to; k += 2) {
     out[at + k] -= factor * column[k + 1];
     out[at + k + 1] += factor * column[k];
   }

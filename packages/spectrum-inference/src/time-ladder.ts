@@ -16,12 +16,15 @@ export interface UsableSignal {
 export const ROUTINE_LADDER_PER_SECOND: readonly number[] = [100, 30, 10, 3, 1, 0];
 
 /** A soft window leaves nothing worth transforming beyond this many of its time constants. */
-const SOFT_SPAN = 8;
+const SOFT_SPAN = 6;
 
 /** Lines left out, in protons: while softly windowed, at the end of the ladder, and for statistics (INFERENCE, search step 3). */
 const SOFT_LINE_WEIGHT_MIN = 3e-4;
 const SEARCH_LINE_WEIGHT_MIN = 3e-5;
 const STATISTICS_LINE_WEIGHT_MIN = 3e-6;
+
+/** In the search, lines further from a window than this are left to its baseline; statistics keep all. */
+const SEARCH_VALUE_REACH_HZ = 100;
 
 /** Weight below which lines are left out of a rung of the search. */
 export function searchLineWeightMin(softWindowPerSecond: number): number {
@@ -48,6 +51,7 @@ export function rungBins(
     dwellSeconds: signal.dwellSeconds,
     softWindowPerSecond,
     lineWeightMin,
+    valueReachHz: lineWeightMin > STATISTICS_LINE_WEIGHT_MIN ? SEARCH_VALUE_REACH_HZ : Number.POSITIVE_INFINITY,
   };
   const plan = sampling.sampleCount === signal.plan.size ? signal.plan : undefined;
   return cutBinWindows(softWindowedSpectrum(signal.samples, sampling, plan), sampling, ranges);

@@ -10,6 +10,7 @@ import type { BlockSolution, TransitionWorkspace } from './transition-workspace.
  *
  * @param shiftsHz (shiftCount) from any common origin; lines are given from the same one
  * @param couplingsHz (couplingCount)
+ * @param lineWeightMin lines below this share of one proton in every group are dropped; by default that of the topology
  * @param out overwritten; its buffers grow when needed and are reused
  * @throws DimensionError for wrong lengths, DomainError for values that are not finite
  * @source Ernst, Bodenhausen & Wokaun (1987) ch. 2; weights: see conventions.ts
@@ -20,8 +21,9 @@ export function computeTransitionsInto(
   couplingsHz: Float64Array,
   workspace: TransitionWorkspace,
   out: TransitionTable,
+  lineWeightMin = compiled.lineWeightMin,
 ): void {
-  evaluate(compiled, shiftsHz, couplingsHz, workspace, out, undefined);
+  evaluate({ compiled, couplingsHz, workspace, table: out, derivatives: undefined, lineWeightMin }, shiftsHz);
 }
 
 /** The same with derivatives by every shift and coupling; see computeTransitionsInto. */
@@ -31,18 +33,13 @@ export function computeTransitionsWithDerivativesInto(
   couplingsHz: Float64Array,
   workspace: TransitionWorkspace,
   out: TransitionDerivatives,
+  lineWeightMin = compiled.lineWeightMin,
 ): void {
-  evaluate(compiled, shiftsHz, couplingsHz, workspace, out, out);
+  evaluate({ compiled, couplingsHz, workspace, table: out, derivatives: out, lineWeightMin }, shiftsHz);
 }
 
-function evaluate(
-  compiled: CompiledSpinTopology,
-  shiftsHz: Float64Array,
-  couplingsHz: Float64Array,
-  workspace: TransitionWorkspace,
-  table: TransitionTable,
-  derivatives: TransitionDerivatives | undefined,
-): void {
+function evaluate(at: Omit<Evaluation, 'component' | 'origin'>, shiftsHz: Float64Array): void {
+  const { compiled, couplingsHz, workspace, table } = at;
   const { topology } = compiled;
   if (shiftsHz.length !== topology.shiftCount || couplingsHz.length !== topology.couplingCount) {
     throw new DimensionError(
@@ -60,7 +57,7 @@ function evaluate(
     component.shiftOfSpin.forEach((shift, s) => {
       workspace.spinShifts[s] = shiftsHz[shift] - origin;
     });
-    evaluateComponent({ compiled, component, couplingsHz, workspace, table, derivatives, origin });
+    evaluateComponent({ ...at, component, origin });
   }
 }
 
@@ -72,6 +69,7 @@ interface Evaluation {
   readonly table: TransitionTable;
   readonly derivatives: TransitionDerivatives | undefined;
   readonly origin: number;
+  readonly lineWeightMin: number;
 }
 
 function evaluateComponent(at: Evaluation): void {
@@ -143,12 +141,11 @@ interface BlockPair {
 }
 
 function emitLines(at: Evaluation, pair: BlockPair, share: number): void {
-  const { compiled, component, workspace, table, derivatives, origin } = at;
+  const { compiled, component, workspace, table, derivatives, origin, lineWeightMin } = at;
   const { upperSize, lowerSize, upper, lower } = pair;
   const { moments, momentSum } = workspace;
   const area = lowerSize * upperSize;
   const groupCount = compiled.topology.groupCount;
-  const first = table.lineCount;
   for (let a = 0; a < lowerSize; a += 1) {
     for (let b = 0; b < upperSize; b += 1) {
       const cell = a * upperSize + b;
@@ -156,87 +153,64 @@ function emitLines(at: Evaluation, pair: BlockPair, share: number): void {
       for (let g = 0; g < component.groups.length; g += 1) {
         largest = Math.max(largest, Math.abs(moments[g * area + cell] * momentSum[cell]) * share);
       }
-      if (largest < compiled.lineWeightMin) continue;
+      if (largest < lineWeightMin) continue;
       const line = appendLine(table, groupCount);
       table.frequencyHz[line] = upper.values[b] - lower.values[a] + origin;
       for (let g = 0; g < component.groups.length; g += 1) {
         table.groupWeight[line * groupCount + component.groups[g]] = moments[g * area + cell] * momentSum[cell] * share;
       }
-      if (derivatives === undefined) continue;
-      appendDerivatives(derivatives, line, groupCount, compiled.parameterCount);
+      if (derivatives !== undefined) emitDerivatives(at, derivatives, pair, { a, b, line, share });
     }
   }
-  if (derivatives !== undefined && table.lineCount > first) emitDerivatives(at, derivatives, pair, share, first);
 }
 
-/** Derivatives of the lines just emitted, one parameter after the other: dT = X_lower' T + T X_upper. */
+interface EmittedLine {
+  readonly a: number;
+  readonly b: number;
+  readonly line: number;
+  readonly share: number;
+}
+
+/**
+ * Derivatives of one line: dT = X_lower' T + T X_upper at its cell. Groups whose weight is below the limit keep zeros: whoever
+ * leaves out their weight has no use for its slope.
+ */
 function emitDerivatives(
-  at: Evaluation,
+  { compiled, component, workspace, lineWeightMin }: Evaluation,
   derivatives: TransitionDerivatives,
   pair: BlockPair,
-  share: number,
-  first: number,
+  { a, b, line, share }: EmittedLine,
 ): void {
-  const { compiled, component, workspace } = at;
   const { upperSize, lowerSize, upper, lower } = pair;
-  const { moments, momentSum, momentSlopes, momentSlopeSum } = workspace;
-  const area = lowerSize * upperSize;
-  const { groupCount } = compiled.topology;
+  const { moments, momentSum } = workspace;
   const { parameterCount } = compiled;
+  const { groupCount } = compiled.topology;
+  const area = lowerSize * upperSize;
+  const cell = a * upperSize + b;
+  appendDerivatives(derivatives, line, groupCount, parameterCount);
   for (let place = 0; place < component.parameters.length; place += 1) {
     const parameter = component.parameters[place];
-    momentSlopeSum.fill(0, 0, area);
+    derivatives.frequencyDerivative[line * parameterCount + parameter] =
+      upper.valueDerivative[place * upperSize + b] - lower.valueDerivative[place * lowerSize + a];
+    const sumSlope = slopeAt(momentSum, 0, pair, place, a, b);
     for (let g = 0; g < component.groups.length; g += 1) {
-      slopeOfMoments(moments, momentSlopes, g * area, pair, place);
-      for (let i = 0; i < area; i += 1) momentSlopeSum[i] += momentSlopes[g * area + i];
-    }
-    let line = first;
-    for (let a = 0; a < lowerSize; a += 1) {
-      for (let b = 0; b < upperSize; b += 1) {
-        const cell = a * upperSize + b;
-        let largest = 0;
-        for (let g = 0; g < component.groups.length; g += 1) {
-          largest = Math.max(largest, Math.abs(moments[g * area + cell] * momentSum[cell]) * share);
-        }
-        if (largest < compiled.lineWeightMin) continue;
-        derivatives.frequencyDerivative[line * parameterCount + parameter] =
-          upper.valueDerivative[place * upperSize + b] - lower.valueDerivative[place * lowerSize + a];
-        for (let g = 0; g < component.groups.length; g += 1) {
-          const entry = (line * groupCount + component.groups[g]) * parameterCount + parameter;
-          derivatives.groupWeightDerivative[entry] =
-            (momentSlopes[g * area + cell] * momentSum[cell] + moments[g * area + cell] * momentSlopeSum[cell]) * share;
-        }
-        line += 1;
-      }
+      const moment = moments[g * area + cell];
+      if (Math.abs(moment * momentSum[cell]) * share < lineWeightMin) continue;
+      const slope = slopeAt(moments, g * area, pair, place, a, b);
+      derivatives.groupWeightDerivative[(line * groupCount + component.groups[g]) * parameterCount + parameter] =
+        (slope * momentSum[cell] + moment * sumSlope) * share;
     }
   }
 }
 
-/** slopes[a][b] = sum_k X_ka^lower T_kb + sum_k T_ak X_kb^upper, for one group's moments at `start`. */
-function slopeOfMoments(
-  moments: Float64Array,
-  slopes: Float64Array,
-  start: number,
-  pair: BlockPair,
-  place: number,
-): void {
+/** sum_k X_ka^lower T_kb + sum_k T_ak X_kb^upper for the moments that start at `start`; X is antisymmetric, so rows serve. */
+function slopeAt(moments: Float64Array, start: number, pair: BlockPair, place: number, a: number, b: number): number {
   const { upperSize, lowerSize, upper, lower } = pair;
-  const upperTurn = place * upperSize * upperSize;
-  const lowerTurn = place * lowerSize * lowerSize;
-  slopes.fill(0, start, start + lowerSize * upperSize);
-  for (let a = 0; a < lowerSize; a += 1) {
-    const row = start + a * upperSize;
-    for (let k = 0; k < lowerSize; k += 1) {
-      const turn = lower.rotation[lowerTurn + k * lowerSize + a];
-      if (turn === 0) continue;
-      const other = start + k * upperSize;
-      for (let b = 0; b < upperSize; b += 1) slopes[row + b] += turn * moments[other + b];
-    }
-    for (let k = 0; k < upperSize; k += 1) {
-      const moment = moments[row + k];
-      if (moment === 0) continue;
-      const turns = upperTurn + k * upperSize;
-      for (let b = 0; b < upperSize; b += 1) slopes[row + b] += moment * upper.rotation[turns + b];
-    }
-  }
+  const lowerRow = place * lowerSize * lowerSize + a * lowerSize;
+  const upperRow = place * upperSize * upperSize + b * upperSize;
+  const row = start + a * upperSize;
+  let slope = 0;
+  for (let k = 0; k < lowerSize; k += 1) slope -= lower.rotation[lowerRow + k] * moments[start + k * upperSize + b];
+  for (let k = 0; k < upperSize; k += 1) slope -= moments[row + k] * upper.rotation[upperRow + k];
+  return slope;
 }

@@ -22,9 +22,6 @@ export interface TransitionWorkspace {
   /** (groups x size x size) I_g- among eigenvectors, then their sum. */
   readonly moments: Float64Array;
   readonly momentSum: Float64Array;
-  /** (groups x size x size) derivative of the moments by one parameter, then their sum. */
-  readonly momentSlopes: Float64Array;
-  readonly momentSlopeSum: Float64Array;
   readonly eigen: EigenWorkspace;
   /** (spins) shifts in the frame of the component. */
   readonly spinShifts: Float64Array;
@@ -47,8 +44,6 @@ export function createTransitionWorkspace(compiled: CompiledSpinTopology): Trans
     product: new Float64Array(square),
     moments: new Float64Array(topology.groupCount * square),
     momentSum: new Float64Array(square),
-    momentSlopes: new Float64Array(topology.groupCount * square),
-    momentSlopeSum: new Float64Array(square),
     eigen: createEigenWorkspace(sizeMax),
     spinShifts: new Float64Array(topology.spins.length),
   };

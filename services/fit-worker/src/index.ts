@@ -1,3 +1,5 @@
+export { analyseAcquisition } from './analysis/analyse-acquisition.ts';
+export type { AnalysisHooks, AnalysisRequest } from './analysis/analysis-request.ts';
 export { createFitWorker, type FitWorker, type FitWorkerOptions } from './create-fit-worker.ts';
 export { engineVersion } from './identity/engine-version.ts';
 export { numericsId } from './identity/numerics-id.ts';
