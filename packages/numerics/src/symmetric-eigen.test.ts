@@ -1,5 +1,6 @@
 import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
 import { describe, expect, it } from 'vitest';
+import { DomainError } from './errors.ts';
 import { createRandomStream } from './random-stream.ts';
 import { createEigenWorkspace, symmetricEigenInto } from './symmetric-eigen.ts';
 
@@ -91,6 +92,21 @@ describe('symmetricEigenInto', () => {
     symmetricEigenInto(20, randomSymmetric(20), new Float64Array(20), new Float64Array(400), workspace);
     expect(run()).toEqual(first);
     expect(matrix).toEqual(before);
+  });
+
+  it('refuses a value that is not finite, wherever it stands', () => {
+    for (const size of [1, 2, 3, 7]) {
+      for (let i = 0; i < size; i += 1) {
+        for (let j = 0; j <= i; j += 1) {
+          for (const value of [Number.NaN, Number.POSITIVE_INFINITY]) {
+            const matrix = randomSymmetric(size);
+            matrix[i * size + j] = value;
+            matrix[j * size + i] = value;
+            expect(() => decompose(size, matrix)).toThrow(DomainError);
+          }
+        }
+      }
+    }
   });
 
   it('refuses buffers that are too small', () => {

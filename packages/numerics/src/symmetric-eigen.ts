@@ -1,4 +1,4 @@
-import { ConvergenceError, DimensionError } from './errors.ts';
+import { ConvergenceError, DimensionError, DomainError } from './errors.ts';
 
 /** Scratch of one matrix size; made once, opaque to callers. */
 export interface EigenWorkspace {
@@ -22,7 +22,7 @@ export function createEigenWorkspace(sizeMax: number): EigenWorkspace {
  * @param matrix (n x n) row-major, both triangles; unchanged unless it is `vectors`
  * @param values (>= n) out, not sorted
  * @param vectors (n x n at the front) out, row k holds eigenvector k; may be `matrix`
- * @throws ConvergenceError when QL does not settle
+ * @throws ConvergenceError when QL does not settle; DomainError for a matrix with values that are not finite
  * @cost about 9 n^3, no allocation
  * @source Martin, Reinsch & Wilkinson, Numer. Math. 11 (1968) 181 (tred2); Bowdler et al., ibid. 293 (tql2), rows for columns
  */
@@ -39,6 +39,7 @@ export function symmetricEigenInto(
   if (size === 0) return;
   if (vectors !== matrix) for (let i = 0; i < size * size; i += 1) vectors[i] = matrix[i];
   if (size === 1) {
+    checkFinite(vectors[0]);
     values[0] = vectors[0];
     vectors[0] = 1;
     return;
@@ -116,6 +117,8 @@ function implicitQl(n: number, z: Float64Array, d: Float64Array, e: Float64Array
   // Against the size of the whole matrix, as tql2 does: beside a zero eigenvalue nothing is small relative to its neighbours.
   let norm = 0;
   for (let i = 0; i < n; i += 1) norm = Math.max(norm, Math.abs(d[i]) + Math.abs(e[i]));
+  // One value that is not finite has reached every later row of the tridiagonal form by now.
+  checkFinite(norm);
   const negligible = Number.EPSILON * norm;
   for (let l = 0; l < n; l += 1) {
     for (let sweep = 0; ; sweep += 1) {
@@ -126,6 +129,11 @@ function implicitQl(n: number, z: Float64Array, d: Float64Array, e: Float64Array
       qlSweep(n, z, d, e, l, m);
     }
   }
+}
+
+function checkFinite(norm: number): void {
+  if (!Number.isFinite(norm))
+    throw new DomainError(`expected a matrix of finite values, got a norm of ${norm}`, { norm });
 }
 
 function qlSweep(n: number, z: Float64Array, d: Float64Array, e: Float64Array, l: number, m: number): void {
