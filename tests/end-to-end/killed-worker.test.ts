@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { askForInventedFit, untilCompleted, untilRunning } from './invented-sample.ts';
-import { makeHome, processesOf, type RunningStack, startStack, workerPid } from './running-stack.ts';
+import { endLaunchers, makeHome, processesOf, type RunningStack, startStack, workerPid } from './running-stack.ts';
 
 let stack: RunningStack;
 let remove: () => Promise<void>;
@@ -10,7 +10,7 @@ beforeAll(async () => {
   stack = await startStack(made.home);
 });
 afterAll(async () => {
-  await stack.stop();
+  await endLaunchers();
   await remove();
 });
 

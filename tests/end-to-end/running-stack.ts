@@ -25,6 +25,16 @@ export async function makeHome(): Promise<{ home: string; remove(): Promise<void
   return { home, remove: () => rm(home, { recursive: true, force: true }) };
 }
 
+const launched = new Set<LauncherProcess>();
+
+/** Stop every launcher of this file that still runs, as Ctrl-C does. */
+export async function endLaunchers(): Promise<void> {
+  for (const { process, ended } of launched) {
+    process.kill('SIGINT');
+    await ended;
+  }
+}
+
 /** Start the launcher as an operator would, on a port that the system chooses. */
 export function launch(home: string, environment: Readonly<Record<string, string>> = {}): LauncherProcess {
   const env = { ...launcherEnvironment(), SPINASSAY_HOME: home, PORT: '0', ...environment };
@@ -38,12 +48,15 @@ export function launch(home: string, environment: Readonly<Record<string, string
     ended.then((how) => reject(new Error(`the launcher ended (${how}):\n${printed()}`)));
   });
   ready.catch(() => {}); // Whoever waits for it hears it; a test may only wait for the end.
-  return { process: child, ready, ended, printed };
+  const started: LauncherProcess = { process: child, ready, ended, printed };
+  launched.add(started);
+  ended.finally(() => launched.delete(started));
+  return started;
 }
 
-/** Without what the test runner and npm have set for themselves. */
+/** Without what the test runner and npm have set for themselves, and with a database of its own for every home. */
 function launcherEnvironment(): Record<string, string> {
-  const kept = ['PATH', 'HOME', 'TMPDIR', 'LANG', 'DATABASE_URL', 'SPINASSAY_POSTGRES'];
+  const kept = ['PATH', 'HOME', 'TMPDIR', 'LANG', 'SPINASSAY_POSTGRES'];
   return Object.fromEntries(kept.flatMap((key) => (process.env[key] === undefined ? [] : [[key, process.env[key]]])));
 }
 

@@ -3,14 +3,18 @@ import { join } from 'node:path';
 import { afterEach, beforeEach, expect, test } from 'vitest';
 import { findPostgres } from '../../deploy/postgres/index.mjs';
 import { askForInventedFit, untilRunning } from './invented-sample.ts';
-import { launch, makeHome, processesOf, startStack } from './running-stack.ts';
+import { endLaunchers, launch, makeHome, processesOf, startStack } from './running-stack.ts';
 
 let home: string;
 let remove: () => Promise<void>;
 beforeEach(async () => {
   ({ home, remove } = await makeHome());
 });
-afterEach(() => remove());
+// A test that failed has left its launcher running.
+afterEach(async () => {
+  await endLaunchers();
+  await remove();
+});
 
 const commandsOf = async () => (await processesOf(home, undefined)).map(({ command }) => command);
 const engines = ['installed', 'embedded'] as const;
