@@ -19,6 +19,16 @@ function faultsOf(file: string | Uint8Array, limits = readingLimits): readonly F
 const codesOf = (...replacements: Replacement[]): string[] =>
   faultsOf(fidFile(...replacements)).map((fault) => fault.code);
 
+/** The small file begun two dwell times late: time zero is at sample -2. */
+const lateAxis: readonly Replacement[] = [
+  ['##FIRST= 0, 1', '##FIRST= 0.001, 1'],
+  ['##LAST= 0.0075', '##LAST= 0.0085'],
+  ['0 1 2 3', '2 1 2 3'],
+  ['8 -2', '10 -2'],
+  ['0 9 8', '2 9 8'],
+  ['8 1 0', '10 1 0'],
+];
+
 test('reads samples, scales and title of a file in plain numbers', () => {
   const { real, imaginary } = smallFid;
   expect(read()).toEqual({
@@ -84,15 +94,11 @@ describe('the time axis', () => {
     ).toBeCloseTo(0.0005, 15);
   });
   test('places time zero where it does not begin at zero', () => {
-    const late = read(
-      ['##FIRST= 0, 1', '##FIRST= 0.001, 1'],
-      ['##LAST= 0.0075', '##LAST= 0.0085'],
-      ['0 1 2 3', '2 1 2 3'],
-      ['8 -2', '10 -2'],
-      ['0 9 8', '2 9 8'],
-      ['8 1 0', '10 1 0'],
-    );
-    expect(late.declared).toEqual({ timeZeroSampleIndex: -2 });
+    expect(read(...lateAxis).declared).toEqual({ timeZeroSampleIndex: -2 });
+  });
+  test('may begin late and say so in the label too', () => {
+    const label: Replacement = ['##NTUPLES= NMR FID\n', '##$TIME ZERO POINT= -2.005\n##NTUPLES= NMR FID\n'];
+    expect(read(...lateAxis, label).declared).toEqual({ timeZeroSampleIndex: -2.005 });
   });
 });
 
@@ -182,6 +188,7 @@ describe('refuses', () => {
       ['carrier-disagrees'],
       [withLabel('##$CARRIER PPM= 4.7\n##$REFERENCE FREQUENCY MHZ= 500.1275')],
     ],
+    ['time zero in two places', ['time-zero-disagrees'], [...lateAxis, withLabel('##$TIME ZERO POINT= 0')]],
     ['a lost line', ['ordinate-count-differs'], [['8 -2 -3 40 -500 0 0 7 7\n', '']]],
     ['a shifted line', ['x-check-failed'], [['8 -2 -3', '9 -2 -3']]],
     ['an ordinate too many', ['too-many-ordinates'], [['0 0 7 7', '0 0 7 7 7']]],

@@ -70,6 +70,10 @@ describe('refuses', () => {
   test('several faults at once', () => {
     expect(codesOf({ dwellSeconds: Number.NaN, observeFrequencyMHz: 0, data: '' })).toHaveLength(3);
   });
+  test.each([null, 7, {}, []])('data that the schema would not let through: %j', (data) => {
+    const body = JSON.parse(JSON.stringify({ ...signal, data })) as SignalBody;
+    expect(readJsonSignal(body)).toMatchObject({ ok: false, faults: [{ code: 'unreadable-base64' }] });
+  });
   test('an encoding that the schema would not let through', () => {
     const body = JSON.parse(JSON.stringify({ ...signal, encoding: 'toString' })) as SignalBody;
     expect(readJsonSignal(body)).toMatchObject({ ok: false, faults: [{ code: 'unsupported-encoding' }] });

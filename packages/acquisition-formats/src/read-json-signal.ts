@@ -84,7 +84,11 @@ function readSamples(signal: SignalBody, limits: ReadingLimits, faults: FaultLis
 }
 
 /** Decode canonical base64 of exactly the expected length; anything else is a fault. */
-function decodeBase64(data: string, byteCount: number, faults: FaultList): Uint8Array | undefined {
+function decodeBase64(data: unknown, byteCount: number, faults: FaultList): Uint8Array | undefined {
+  if (typeof data !== 'string') {
+    report(faults, 'unreadable-base64', 'data', 'data is not a text; expected base64 (RFC 4648 section 4)');
+    return undefined;
+  }
   // Checked first, so that a wrong length is named as such and nothing oversized is decoded.
   const padding = data.endsWith('==') ? 2 : data.endsWith('=') ? 1 : 0;
   const held = Math.floor((data.length * 3) / 4) - padding;
