@@ -87,11 +87,16 @@ function conclude(findings: Findings): SpectrumAnswer {
   const isOwnWindows = question.windows.length > 0;
   // Where windows are narrowed afterwards, the whole range serves presence alone: the best mode is enough.
   const wide = weighModes(context, wideBins, isOwnWindows ? search.modes : search.modes.slice(0, 1));
-  const logBayes = logBayesFactors(context, wide);
-  const present = layout.compounds.map((_, c) => c === layout.referenceIndex || (logBayes[c] ?? 0) > PLAINLY_PRESENT);
+  const wideLogBayes = logBayesFactors(context, wide);
+  const present = layout.compounds.map(
+    (_, c) => c === layout.referenceIndex || (wideLogBayes[c] ?? 0) > PLAINLY_PRESENT,
+  );
   const isNarrowed = !isOwnWindows && present.some((is, c) => is && c !== layout.referenceIndex);
   const bins = isNarrowed ? narrowBins(findings, wide, present) : wideBins;
   const modes = isNarrowed ? weighModes(context, bins, search.modes) : wide;
+  // Evidence must hold over the whole prior range and where the compound's own lines stand: elsewhere it may feed on a stranger.
+  const ownLogBayes = isNarrowed ? logBayesFactors(context, modes) : wideLogBayes;
+  const logBayes = wideLogBayes.map((value, c) => Math.min(value, ownLogBayes[c]));
   const best = modes[0].posterior;
   const toPpm = (hz: number): number => (hz - zeroHz) / question.hertzPerPpm;
   return {
@@ -106,7 +111,12 @@ function conclude(findings: Findings): SpectrumAnswer {
       highPpm: toPpm(highHz),
       ...rest,
     })),
-    unexplained: unexplained(findings, modes[0], present, toPpm),
+    unexplained: unexplained(
+      findings,
+      modes[0],
+      present.map((is, c) => is && (c === layout.referenceIndex || logBayes[c] > PLAINLY_PRESENT)),
+      toPpm,
+    ),
     intensityBroadening: present.some((is, c) => is && c !== layout.referenceIndex)
       ? intensityBroadening(question, findings.priors, context, bins, best)
       : undefined,
