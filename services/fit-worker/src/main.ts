@@ -46,6 +46,11 @@ const threads = createAnalysisThreads({
   entry: new URL('./threads/entry.js', import.meta.url),
   readyCount: concurrency,
 });
+// Threads that cannot start would fail every fit they are given.
+await threads.ready().catch((error: unknown) => {
+  logger.error({ err: error }, 'threads-cannot-start');
+  process.exit(1);
+});
 const worker = createFitWorker({
   store,
   bell,

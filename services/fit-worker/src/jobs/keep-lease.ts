@@ -28,9 +28,11 @@ export function keepLease({ store, fence, leaseSeconds, onTrouble }: LeaseOption
   let news: { stage: string; fraction: number } | undefined;
   let renewedAt = performance.now();
   let isAsking = false;
+  let isAskedAgain = false;
 
   const renew = async (): Promise<void> => {
-    // A slow answer must not let questions pile up.
+    isAskedAgain = isAsking;
+    // A slow answer must not let questions pile up; whoever asked meanwhile may know of something that it does not.
     if (isAsking || stopping.signal.aborted) return;
     isAsking = true;
     const told = news;
@@ -42,9 +44,9 @@ export function keepLease({ store, fence, leaseSeconds, onTrouble }: LeaseOption
     } catch (error) {
       news ??= told;
       onTrouble(error);
-    } finally {
-      isAsking = false;
     }
+    isAsking = false;
+    if (isAskedAgain) void renew();
   };
   const timer = setInterval(() => {
     const isDue = performance.now() - renewedAt > (leaseSeconds * 1_000) / 3;

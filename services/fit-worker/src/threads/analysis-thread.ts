@@ -28,6 +28,8 @@ export type ThreadHooks = {
 export type AnalysisThread = {
   /** @throws AnalysisThrew, ThreadEnded, or the reason of the signal; the samples of the request are moved into the thread */
   analyse(request: AnalysisRequest, hooks: ThreadHooks): Promise<AnalysisOutcome>;
+  /** Resolves when its program is loaded. @throws ThreadEnded when that cannot be */
+  readonly ready: Promise<void>;
   /** False once the thread has ended: it cannot be used again. */
   isAlive(): boolean;
   end(): Promise<void>;
@@ -35,7 +37,7 @@ export type AnalysisThread = {
 
 /** An analysis looks at its flag between steps; one that does not within this time is ended with its thread. */
 const unansweredMillisecondsMax = 500;
-/** A fit that needs more is ended alone instead of taking the process along. 2 GiB: a 4 Mi point signal with its spectra is 0.5. */
+/** A fit with more objects than this is ended alone instead of taking the process along. Typed arrays lie outside of the limit. */
 const resourceLimits = { maxOldGenerationSizeMb: 2_048 };
 
 /** Start a thread that runs the program at `entry`. */
@@ -50,7 +52,13 @@ export function startAnalysisThread(entry: URL): AnalysisThread {
   worker.on('exit', () => {
     hasEnded = true;
   });
+  const ready = new Promise<void>((resolve, reject) => {
+    worker.once('message', () => resolve()); // The first message is always `ready`.
+    worker.once('exit', () => reject(new ThreadEnded('the thread ended before it was ready', { cause: fault })));
+  });
+  ready.catch(() => {}); // An analysis in this thread meets the same end and tells of it.
   return {
+    ready,
     analyse: (request, hooks) => analyseIn(worker, request, hooks, () => fault),
     isAlive: () => !hasEnded,
     end: async () => {
@@ -83,6 +91,7 @@ function analyseIn(
       finish(() => reject(hooks.signal.aborted ? (hooks.signal.reason as Error) : error));
     const onExit = (): void => fail(new ThreadEnded('the thread ended', { cause: faultOf() }));
     const onReport = (report: ThreadReport): void => {
+      if (report.kind === 'ready') return;
       if (report.kind === 'progressed') hooks.onProgress(report.stage, report.fraction);
       else if (report.kind === 'completed') finish(() => resolve(report.outcome));
       else fail(new AnalysisThrew(report.failure));

@@ -68,3 +68,11 @@ test('tells of a thread that ended under its analysis, and goes on with another'
   await expect(threads.analyse(madeUpRequest('end the thread'), unheard())).rejects.toBeInstanceOf(ThreadEnded);
   expect((await threads.analyse(madeUpRequest('answer'), unheard())).recommendation).toBe('held');
 });
+
+test('tells at once that its threads cannot load their program, and why', async () => {
+  const broken = createAnalysisThreads({ entry: new URL('./no-such-program.js', import.meta.url), readyCount: 1 });
+  const error = await broken.ready().catch((reason) => reason);
+  expect(error).toBeInstanceOf(ThreadEnded);
+  expect(String(error.cause)).toContain('no-such-program.js');
+  await expect(threads.ready()).resolves.toBeUndefined();
+});

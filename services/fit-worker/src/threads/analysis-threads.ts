@@ -4,6 +4,8 @@ import type { AnalysisOutcome } from './thread-messages.ts';
 
 /** The threads of one worker. Whoever calls decides how many analyses run at once; there are as many threads as were ever needed. */
 export type AnalysisThreads = {
+  /** Resolves when the first threads have loaded their program. @throws ThreadEnded when they cannot: no fit should be claimed then */
+  ready(): Promise<void>;
   /** @throws AnalysisThrew, ThreadEnded, or the reason of the signal */
   analyse(request: AnalysisRequest, hooks: ThreadHooks): Promise<AnalysisOutcome>;
   /** End every thread, whatever it does. */
@@ -32,7 +34,11 @@ export function createAnalysisThreads({ entry, readyCount }: { entry: URL; ready
     }
     return start();
   };
+  const first = [...all];
   return {
+    ready: async () => {
+      await Promise.all(first.map((thread) => thread.ready));
+    },
     analyse: async (request, hooks) => {
       const thread = takeIdle();
       try {

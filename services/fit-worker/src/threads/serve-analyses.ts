@@ -19,6 +19,7 @@ export function serveAnalyses(port: MessagePort, analyse: Analyse): void {
       report({ kind: 'failed', failure: describe(error) });
     }
   });
+  report({ kind: 'ready' });
 }
 
 function hooksOf({ cancelFlag }: ThreadOrder, report: (message: ThreadReport) => void): AnalysisHooks {

@@ -24,8 +24,9 @@ export type ThreadFailure = {
   readonly record?: ProblemRecord;
 };
 
-/** From a thread. Any number of `progressed`, then one of the others. */
+/** From a thread: `ready` once, when its program is loaded; then, for each order, any number of `progressed` and one of the others. */
 export type ThreadReport =
+  | { readonly kind: 'ready' }
   | { readonly kind: 'progressed'; readonly stage: string; readonly fraction: number }
   | { readonly kind: 'completed'; readonly outcome: AnalysisOutcome }
   | { readonly kind: 'failed'; readonly failure: ThreadFailure };
