@@ -1,8 +1,11 @@
 import { type DampedLine, lineResponseInto } from '@spinassay/signal-processing';
 import type { BinWindow, BinWindows } from './bin-windows.ts';
-import { createSystemLines, type SystemLines } from './compound-lines.ts';
+import { addScaled } from './column-sums.ts';
+import { createSystemLines } from './compound-lines.ts';
 import { createLineField, type LineField } from './line-field.ts';
-import type { ParameterLayout, SystemPlaces } from './parameter-layout.ts';
+import type { ParameterLayout } from './parameter-layout.ts';
+import { decayOf, type SystemContext } from './system-context.ts';
+import { addSystemDerivatives } from './system-derivatives.ts';
 
 /**
  * The model of a spectrum: B_c = exp(i phase) sum over the lines of compound c of r_g w_lg G(f_l, R_g), in the bins of windows.
@@ -34,8 +37,6 @@ export interface ModelLine {
 
 /** Group weights below this share of one proton are left out of the bins. */
 const WEIGHT_MIN = 1e-6;
-/** Derivatives of a line are evaluated in windows that reach within this distance of it; tails move the baseline only. */
-const DERIVATIVE_REACH_HZ = 25;
 
 /** Compile a model for a layout. Throws SystemTooLargeError for a spin system beyond the exact engine. */
 export function createSpectrumModel(layout: ParameterLayout): SpectrumModel {
@@ -84,19 +85,6 @@ export function createSpectrumModel(layout: ParameterLayout): SpectrumModel {
   };
 }
 
-interface SystemContext {
-  readonly layout: ParameterLayout;
-  readonly system: SystemLines;
-  readonly places: SystemPlaces;
-  readonly compound: number;
-  readonly values: Float64Array;
-  readonly shiftsHz: Float64Array;
-  readonly couplingsHz: Float64Array;
-  readonly lineWeightMin: number;
-  readonly leadSamples: number;
-  readonly field: LineField;
-}
-
 function shiftsHzOf(layout: ParameterLayout, compound: number, system: number, values: Float64Array): Float64Array {
   const zero = layout.referencePosition < 0 ? layout.declaredZeroHz : values[layout.referencePosition];
   const { shift } = layout.places[compound][system];
@@ -129,13 +117,6 @@ function linesOf(context: SystemContext): ModelLine[] {
   return lines;
 }
 
-function decayOf(context: SystemContext, group: number, frequencyHz: number): number {
-  const { layout, places, values, field } = context;
-  const decay = Math.exp(values[places.logDecay + group]);
-  if (layout.intensityBroadening < 0) return decay;
-  return Math.max(0, decay + values[layout.intensityBroadening] * field(frequencyHz));
-}
-
 function addSystemValues(context: SystemContext, bins: BinWindows, column: Float64Array, value: Float64Array): void {
   const { system, places, values, leadSamples } = context;
   const groupCount = system.system.groups.length;
@@ -159,144 +140,6 @@ function addSystemValues(context: SystemContext, bins: BinWindows, column: Float
   }
 }
 
-interface Scratch {
-  readonly value: Float64Array;
-  readonly slope: Float64Array;
-}
-
-function addSystemDerivatives(
-  context: SystemContext,
-  amount: number,
-  bins: BinWindows,
-  columns: readonly Float64Array[],
-  scratch: Scratch,
-): void {
-  const { system, places, values, leadSamples } = context;
-  const groupCount = system.system.groups.length;
-  const line: DampedLine = { frequencyHz: 0, decayPerSecond: 0, leadSamples };
-  for (let i = 0; i < system.isotopologues.length; i += 1) {
-    const table = system.linesWithDerivatives(i, context);
-    const share = system.isotopologues[i].weight * system.system.copyCount * amount;
-    for (let l = 0; l < table.lineCount; l += 1) {
-      line.frequencyHz = table.frequencyHz[l];
-      for (let g = 0; g < groupCount; g += 1) {
-        const weight = table.groupWeight[l * groupCount + g] * share;
-        const response = values[places.response + g];
-        if (Math.abs(weight) < bins.lineWeightMin * Math.abs(amount)) continue;
-        line.decayPerSecond = decayOf(context, g, line.frequencyHz);
-        const slope = { table, l, g, share: share * response, weight: weight * response, line, amount, response };
-        for (const window of bins.windows) {
-          const stretch = stretchNear(window, bins, line.frequencyHz);
-          if (stretch.start >= stretch.end) continue;
-          lineResponseInto(window.grid, line, scratch.value, scratch.slope, stretch);
-          addLineSlopes(context, slope, { window, stretch, ...scratch }, columns);
-        }
-      }
-    }
-  }
-}
-
-/** The bins of a window within reach of a line; soft lines reach further. */
-function stretchNear(window: BinWindow, bins: BinWindows, frequencyHz: number): { start: number; end: number } {
-  const reach = DERIVATIVE_REACH_HZ + window.grid.softWindowPerSecond;
-  const place = (hz: number): number => Math.ceil(hz / bins.binSpacingHz) - window.firstBin;
-  return {
-    start: Math.max(0, place(frequencyHz - reach)),
-    end: Math.min(window.grid.binCount, place(frequencyHz + reach)),
-  };
-}
-
-interface LineSlope {
-  readonly table: ReturnType<SystemLines['linesWithDerivatives']>;
-  readonly l: number;
-  readonly g: number;
-  /** Amount times copies, isotopologue and response. */
-  readonly share: number;
-  /** The line's weight times share. */
-  readonly weight: number;
-  readonly response: number;
-  readonly line: DampedLine;
-  readonly amount: number;
-}
-
-interface EvaluatedStretch extends Scratch {
-  readonly window: BinWindow;
-  readonly stretch: { readonly start: number; readonly end: number };
-}
-
-/** Add one line's share to the derivative columns of everything that moves, widens or reweights it. */
-function addLineSlopes(
-  context: SystemContext,
-  { table, l, g, share, weight, response, line, amount }: LineSlope,
-  { window, stretch, value, slope }: EvaluatedStretch,
-  columns: readonly Float64Array[],
-): void {
-  const { system, places, values, layout, field, lineWeightMin } = context;
-  const groupCount = system.system.groups.length;
-  const derivativeCount = groupCount + system.system.couplings.length;
-  const turn = 2 * Math.PI;
-  const negligible = lineWeightMin * Math.abs(amount);
-  const from = 2 * stretch.start;
-  const to = 2 * stretch.end;
-  const at = 2 * window.offset;
-  const add = (place: number, column: Float64Array, factor: number): void =>
-    addScaled(columns[place], at, column, from, to, factor);
-  const addTurned = (place: number, column: Float64Array, factor: number): void =>
-    addRotated(columns[place], at, column, from, to, factor);
-  for (let p = 0; p < derivativeCount; p += 1) {
-    const isShift = p < groupCount;
-    if (isShift && places.shift < 0) continue;
-    const chain = isShift ? layout.hertzPerPpm : 1;
-    const place = isShift ? places.shift + p : places.coupling + p - groupCount;
-    const weightSlope = table.groupWeightDerivative[(l * groupCount + g) * derivativeCount + p] * share * chain;
-    const frequencySlope = table.frequencyDerivative[l * derivativeCount + p] * weight * chain * turn;
-    if (Math.abs(weightSlope) > negligible * chain) add(place, value, weightSlope);
-    if (Math.abs(frequencySlope) > negligible * chain) addTurned(place, slope, frequencySlope);
-  }
-  if (layout.referencePosition >= 0) addTurned(layout.referencePosition, slope, weight * turn);
-  if (places.shift >= 0) addTurned(layout.commonOffset, slope, weight * turn * layout.hertzPerPpm);
-  add(places.logDecay + g, slope, -weight * Math.exp(values[places.logDecay + g]));
-  if (layout.intensityBroadening >= 0) add(layout.intensityBroadening, slope, -weight * field(line.frequencyHz));
-  add(places.response + g, value, weight / response);
-  addTurned(layout.phase, value, weight);
-  // d/d tau of exp(s (n0 - tau) dt) is -s dt, s = 2 pi i f - R.
-  const dwell = window.grid.dwellSeconds;
-  add(layout.timeZero, value, weight * dwell * line.decayPerSecond);
-  addTurned(layout.timeZero, value, -weight * dwell * turn * line.frequencyHz);
-}
-
-/** How far a frequency lies outside a window, Hz; 0 inside. */
-function distance(window: BinWindow, frequencyHz: number): number {
-  return Math.max(0, window.lowHz - frequencyHz, frequencyHz - window.highHz);
-}
-
-/** out += factor column over the reals from...to of a window whose first real in `out` is `at`. */
-function addScaled(
-  out: Float64Array,
-  at: number,
-  column: Float64Array,
-  from: number,
-  to: number,
-  factor: number,
-): void {
-  for (let k = from; k < to; k += 1) out[at + k] += factor * column[k];
-}
-
-/** The same with i times a real factor. */
-function addRotated(
-  out: Float64Array,
-  at: number,
-  column: Float64Array,
-  from: number,
-  to: number,
-  factor: number,
-): void {
-  for (let k = from; k < to; k += 2) {
-    out[at + k] -= factor * column[k + 1];
-    out[at + k + 1] += factor * column[k];
-  }
-}
-
 function rotateInPlace(column: Float64Array, phaseRadians: number): void {
   const cos = Math.cos(phaseRadians);
   const sin = Math.sin(phaseRadians);
@@ -306,4 +149,9 @@ function rotateInPlace(column: Float64Array, phaseRadians: number): void {
     column[k] = re * cos - im * sin;
     column[k + 1] = re * sin + im * cos;
   }
+}
+
+/** How far a frequency lies outside a window, Hz; 0 inside. */
+function distance(window: BinWindow, frequencyHz: number): number {
+  return Math.max(0, window.lowHz - frequencyHz, frequencyHz - window.highHz);
 }
