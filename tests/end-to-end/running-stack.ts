@@ -117,6 +117,17 @@ export async function processesOf(home: string, launcherPid: number | undefined)
     .filter(({ ppid, command }) => ppid === launcherPid || command.includes(home));
 }
 
+/**
+ * Commands of those that still run. One that has ended and that nobody has collected (state Z) does not: the first process of a
+ * container may collect nobody.
+ */
+export async function stillRunning(processes: readonly ListedProcess[]): Promise<string[]> {
+  const { stdout } = await run('ps', ['-e', '-o', 'pid=,stat=']);
+  const states = new Map(stdout.split('\n').map((line) => line.trim().split(/\s+/) as [string, string]));
+  const isRunning = (state: string | undefined) => state !== undefined && !state.startsWith('Z');
+  return processes.filter(({ pid }) => isRunning(states.get(String(pid)))).map(({ command }) => command);
+}
+
 /** Process id of the worker under a launcher. */
 export async function workerPid({ home, process: { pid } }: RunningStack): Promise<number> {
   const found = (await processesOf(home, pid)).find(({ command }) => command.includes('fit-worker'));

@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { afterEach, beforeEach, expect, test } from 'vitest';
 import { findPostgres } from '../../deploy/postgres/index.mjs';
 import { askForInventedFit, untilRunning } from './invented-sample.ts';
-import { endLaunchers, launch, makeHome, processesOf, startStack } from './running-stack.ts';
+import { endLaunchers, launch, makeHome, processesOf, startStack, stillRunning } from './running-stack.ts';
 
 let home: string;
 let remove: () => Promise<void>;
@@ -44,7 +44,7 @@ for (const engine of engines) {
       first.process.kill('SIGINT');
       expect(await first.ended).toBe(0);
       expect(await commandsOf()).toEqual([]);
-      for (const { pid } of children) expect(() => process.kill(pid, 0)).toThrow('ESRCH');
+      expect(await stillRunning(children)).toEqual([]);
 
       const second = await startStack(home, environment);
       expect(second.access.keys).toEqual(first.access.keys);
@@ -75,8 +75,7 @@ test('leaves at once at a second signal, and leaves nothing', async () => {
     .poll(() => stack.process.kill('SIGINT') && stack.printed(), { timeout: 10_000 })
     .toContain('leaving at once');
   expect(await stack.ended).toBe(1);
-  const left = () => children.filter(({ pid }) => isAlive(pid)).map(({ command }) => command);
-  await expect.poll(left, { timeout: 20_000 }).toEqual([]);
+  await expect.poll(() => stillRunning(children), { timeout: 20_000 }).toEqual([]);
 });
 
 test('is not survived by its services when it is killed, and goes on with the database that was', async () => {
@@ -86,8 +85,7 @@ test('is not survived by its services when it is killed, and goes on with the da
   );
   expect(services).toHaveLength(2);
   first.process.kill('SIGKILL');
-  const left = () => services.filter(({ pid }) => isAlive(pid)).map(({ command }) => command);
-  await expect.poll(left, { timeout: 20_000 }).toEqual([]);
+  await expect.poll(() => stillRunning(services), { timeout: 20_000 }).toEqual([]);
   const second = await startStack(home);
   expect(second.access.keys).toEqual(first.access.keys);
   await second.stop();
@@ -104,11 +102,3 @@ test.each([
   expect(started.printed()).toContain(expected);
   expect(await commandsOf()).toEqual([]);
 });
-
-function isAlive(pid: number): boolean {
-  try {
-    return process.kill(pid, 0);
-  } catch {
-    return false; // ESRCH: there is no such process.
-  }
-}
