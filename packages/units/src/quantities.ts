@@ -6,7 +6,10 @@ export type Megahertz = Branded<'MHz'>;
 export type Seconds = Branded<'s'>;
 export type PartsPerMillion = Branded<'ppm'>;
 export type PerSecond = Branded<'1/s'>;
+export type Radians = Branded<'rad'>;
+export type Tesla = Branded<'T'>;
 export type Celsius = Branded<'Cel'>;
+export type MillimolesPerLitre = Branded<'mmol/L'>;
 
 /** A value that no quantity can have. */
 export class UnitError extends Error {
@@ -44,4 +47,19 @@ export function perSecond(value: number): PerSecond {
 
 export function celsius(value: number): Celsius {
   return finite(value, 'degrees Celsius') as Celsius;
+}
+
+/** A phase or an angle, radians; never wrapped. */
+export function radians(value: number): Radians {
+  return finite(value, 'radians') as Radians;
+}
+
+/** A magnetic flux density, tesla. */
+export function tesla(value: number): Tesla {
+  return finite(value, 'tesla') as Tesla;
+}
+
+/** An amount concentration, mmol/L. An estimate may be negative, so none is refused for its sign. */
+export function millimolesPerLitre(value: number): MillimolesPerLitre {
+  return finite(value, 'mmol/L') as MillimolesPerLitre;
 }

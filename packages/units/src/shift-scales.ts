@@ -32,7 +32,7 @@ function zeroOnDssScale(scale: ShiftScale, pH: number | undefined): number {
 }
 
 /**
- * Shift of residual water in D2O, 0 to 100 degrees: 5.060 - 0.0122 T + 2.11e-5 T^2 ppm.
+ * Shift of residual water in D2O: 5.060 - 0.0122 T + 2.11e-5 T^2 ppm, published for 0 to 100 degrees; outside, the curve only runs on.
  *
  * @source Gottlieb, Kotlyar & Nudelman, J. Org. Chem. 62 (1997) 7512, eq. 1
  */
