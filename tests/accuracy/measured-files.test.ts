@@ -106,6 +106,21 @@ describeWithReferenceData('4-aminobutyric acid, 20 mM in D2O, 500 MHz', (folder)
     expect(change).not.toBe(0);
   });
 
+  it('is releasable too when the windows are made from the panel, as in the README', () => {
+    const made = analyse({
+      ...gabaFile(folder),
+      method: oneCompoundMethod(GABA, TSP),
+      compounds: starterCompounds(GABA, TSP),
+    });
+    for (const { label, ratio } of made.compounds[0].spinSystems[0].groups) {
+      console.log(
+        `GABA ratio ${label}, own windows: ${ratio?.value.toFixed(4)} [${ratio?.low95.toFixed(4)}, ${ratio?.high95.toFixed(4)}]`,
+      );
+    }
+    expect(made.recommendation.reasons).toEqual([]);
+    expect(made.compounds[0].presence.verdict).toBe('supported');
+  });
+
   it.each(['formic-acid', 'butyric-acid', 'l-glutamic-acid'])('never supports %s, and holds', (compoundId) => {
     const wrong = analyse({
       ...gabaFile(folder),

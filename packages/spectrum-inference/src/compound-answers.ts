@@ -99,14 +99,19 @@ function groupAnswer(
   const group = layout.compounds[c].spinSystems[s].groups[g];
   const places = layout.places[c][s];
   const groupCount = responsePlaces(layout, c).length;
+  const best = modes[0].posterior;
   return {
     label: group.label,
     protonCount: group.spins.reduce((sum, spin) => sum + spin.protonCount, 0),
-    shiftPpm: posteriorEstimate(modes, ({ fit }) =>
-      combination(layout, fit, [
-        [places.shift + g, 1],
-        [layout.commonOffset, 1],
-      ]),
+    shiftPpm: posteriorEstimate(
+      modes,
+      ({ fit }) =>
+        combination(layout, fit, [
+          [places.shift + g, 1],
+          [layout.commonOffset, 1],
+        ]),
+      // A shape error of relative size eps may displace a whole multiplet, and the reference, by eps of its width, unseen.
+      (eps) => eps * eps * squaredWidthsPpm(layout, best.fit, places.logDecay + g),
     ),
     shiftPullSd: modes[0].posterior.fit.standardised[places.shift + g],
     linewidthHz: posteriorEstimate(modes, ({ fit }) => linewidthFunctional(layout, fit, places.logDecay + g)),
@@ -145,6 +150,16 @@ function combination(layout: ParameterLayout, fit: Fit, terms: readonly (readonl
     gradient[place] += factor * unit;
   }
   return { value, gradient };
+}
+
+/** Squared full widths of a group's lines and of the reference line, ppm^2. */
+function squaredWidthsPpm(layout: ParameterLayout, fit: Fit, place: number): number {
+  const own = linewidthFunctional(layout, fit, place).value;
+  const reference =
+    layout.referenceIndex < 0
+      ? 0
+      : linewidthFunctional(layout, fit, layout.places[layout.referenceIndex][0].logDecay).value;
+  return (own * own + reference * reference) / (layout.hertzPerPpm * layout.hertzPerPpm);
 }
 
 /** Full width at half maximum R / pi, R = exp(log-decay). */

@@ -40,7 +40,7 @@ export function judge(request: AnalysisRequest, answer: SpectrumAnswer): Judgeme
   const claims = request.method.claims;
   const relevant = holdings.filter((holding) => holding.holds.some((claim) => claims.includes(claim)));
   return {
-    explainsSpectrum: explains(spectrum),
+    explainsSpectrum: explains(spectrum.filter((holding) => holding.holds.length === ALL_CLAIMS.length)),
     recommendation: {
       overall: relevant.length === 0 ? 'releasable' : 'held',
       byClaim: claims.map((claim) => {

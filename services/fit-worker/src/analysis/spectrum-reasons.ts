@@ -31,20 +31,47 @@ function broadening({ intensityBroadening: found }: SpectrumAnswer): Holding[] {
   ];
 }
 
-function largeResiduals({ windows }: SpectrumAnswer, residualFractionMax: number): Holding[] {
-  const poor = windows.filter((w) => w.residualFraction > residualFractionMax && !isNoise(w.reducedChiSquare));
-  if (poor.length === 0) return [];
-  const worst = poor.reduce((a, b) => (b.residualFraction > a.residualFraction ? b : a));
-  return [
-    {
+function largeResiduals(answer: SpectrumAnswer, residualFractionMax: number): Holding[] {
+  const poor = answer.windows.filter((w) => w.residualFraction > residualFractionMax && !isNoise(w.reducedChiSquare));
+  const ofCompounds = poor.filter((window) => !holdsReferenceAlone(window, answer));
+  const ofReference = poor.filter((window) => holdsReferenceAlone(window, answer));
+  const holdings: Holding[] = [];
+  if (ofCompounds.length > 0) {
+    const worst = ofCompounds.reduce((a, b) => (b.residualFraction > a.residualFraction ? b : a));
+    holdings.push({
       holds: ALL_CLAIMS,
       reason: {
         code: 'residual-too-large',
         detail: `The model leaves ${percent(worst.residualFraction)} of the signal unexplained between ${worst.lowPpm.toFixed(3)} and ${worst.highPpm.toFixed(3)} ppm; the method allows ${percent(residualFractionMax)}.`,
-        regionsPpm: poor.map(({ lowPpm, highPpm }) => ({ lowPpm, highPpm })),
+        regionsPpm: ofCompounds.map(({ lowPpm, highPpm }) => ({ lowPpm, highPpm })),
       },
-    },
-  ];
+    });
+  }
+  const [reference] = ofReference;
+  if (reference !== undefined) {
+    holdings.push({
+      // Its place is good to a small share of its width all the same; an amount counted against it is not.
+      holds: ['amounts'],
+      reason: {
+        code: 'reference-line-misshapen',
+        detail: `The model leaves ${percent(reference.residualFraction)} of the reference line unexplained; the method allows ${percent(residualFractionMax)}. Amounts counted against it would carry that error.`,
+        regionsPpm: [{ lowPpm: reference.lowPpm, highPpm: reference.highPpm }],
+      },
+    });
+  }
+  return holdings;
+}
+
+/** True for a window about 0 ppm in which no group of the compounds asked for stands. */
+function holdsReferenceAlone(
+  { lowPpm, highPpm }: { lowPpm: number; highPpm: number },
+  answer: SpectrumAnswer,
+): boolean {
+  const isInside = (shift: number): boolean => shift >= lowPpm && shift <= highPpm;
+  const shifts = answer.compounds.flatMap((compound) =>
+    compound.spinSystems.flatMap((system) => system.groups.map((group) => group.shiftPpm.value)),
+  );
+  return answer.reference.isFound && isInside(0) && !shifts.some(isInside);
 }
 
 function unexplained({ unexplained: regions }: SpectrumAnswer): Holding[] {
