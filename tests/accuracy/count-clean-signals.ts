@@ -1,12 +1,6 @@
 import type { CompoundBody, ResultBody } from '@spinassay/contract';
-import { describe, expect, it } from 'vitest';
 import { analyse } from './analyse-file.ts';
 import { CLEAN_SIGNALS, type CleanSignal, cleanSignal } from './clean-signals.ts';
-
-const SIGNAL_COUNT = 50;
-/** Of 50: releasable, and inside the 95 % interval (issue 2). A coverage of 0.95 stays at 45 or above with chance 0.96. */
-const RELEASABLE_MIN = 48;
-const COVERED_MIN = 45;
 
 const SOURCE = 'invented for this test';
 const STANDARD: CompoundBody = {
@@ -88,34 +82,44 @@ function analyseClean(signal: CleanSignal): ResultBody {
   });
 }
 
-describe(`${SIGNAL_COUNT} clean signals of 3 to 6 spins with a known standard`, () => {
-  it('are releasable, right within 5 % and inside their intervals as often as promised', () => {
-    let releasable = 0;
-    let covered = 0;
-    let withinFivePercent = 0;
-    const relativeSds: number[] = [];
-    for (let seed = 0; seed < SIGNAL_COUNT; seed += 1) {
-      const signal = cleanSignal(seed);
-      const result = analyseClean(signal);
-      const truth = signal.amountMillimolesPerLitre;
-      const posterior = result.compounds[0]?.amount?.posterior;
-      if (posterior === undefined) throw new Error(`expected an amount for signal ${seed}`);
-      const isReleasable = result.recommendation.overall === 'releasable';
-      const isCovered = posterior.low95 <= truth && truth <= posterior.high95;
-      releasable += isReleasable ? 1 : 0;
-      covered += isCovered ? 1 : 0;
-      withinFivePercent += Math.abs(posterior.value / truth - 1) < 0.05 ? 1 : 0;
-      relativeSds.push(posterior.sd / truth);
-      console.log(
-        `signal ${seed}, ${signal.truth.shiftsPpm.length} spins: ${(100 * (posterior.value / truth - 1)).toFixed(2)} % off, sd ${((100 * posterior.sd) / truth).toFixed(2)} %, ${isCovered ? 'inside' : 'outside'}, ${result.recommendation.overall} ${result.recommendation.reasons.map(({ code }) => code).join(', ')}`,
-      );
-    }
-    relativeSds.sort((a, b) => a - b);
+/** Clean signals in all; two tests take half of them each, to run side by side. */
+const SIGNAL_COUNT = 50;
+
+/** What came of a run of clean signals. */
+export interface CleanCount {
+  readonly signals: number;
+  readonly releasable: number;
+  readonly covered: number;
+  readonly withinFivePercent: number;
+}
+
+/** Analyse every second clean signal from `first` to 49, print each, and count. */
+export function countCleanSignals(first: 0 | 1): CleanCount {
+  let signals = 0;
+  let releasable = 0;
+  let covered = 0;
+  let withinFivePercent = 0;
+  const relativeSds: number[] = [];
+  for (let seed = first; seed < SIGNAL_COUNT; seed += 2) {
+    const signal = cleanSignal(seed);
+    const result = analyseClean(signal);
+    const truth = signal.amountMillimolesPerLitre;
+    const posterior = result.compounds[0]?.amount?.posterior;
+    if (posterior === undefined) throw new Error(`expected an amount for signal ${seed}`);
+    const isCovered = posterior.low95 <= truth && truth <= posterior.high95;
+    signals += 1;
+    releasable += result.recommendation.overall === 'releasable' ? 1 : 0;
+    covered += isCovered ? 1 : 0;
+    withinFivePercent += Math.abs(posterior.value / truth - 1) < 0.05 ? 1 : 0;
+    relativeSds.push(posterior.sd / truth);
     console.log(
-      `of ${SIGNAL_COUNT}: ${releasable} releasable, ${withinFivePercent} within 5 %, ${covered} inside 95 %, median sd ${(100 * relativeSds[Math.floor(SIGNAL_COUNT / 2)]).toFixed(2)} %`,
+      `signal ${seed}, ${signal.truth.shiftsPpm.length} spins: ${(100 * (posterior.value / truth - 1)).toFixed(2)} % off, sd ${((100 * posterior.sd) / truth).toFixed(2)} %, ${isCovered ? 'inside' : 'outside'}, ${result.recommendation.overall} ${result.recommendation.reasons.map(({ code }) => code).join(', ')}`,
     );
-    expect(releasable).toBeGreaterThanOrEqual(RELEASABLE_MIN);
-    expect(covered).toBeGreaterThanOrEqual(COVERED_MIN);
-    expect(withinFivePercent).toBeGreaterThanOrEqual(RELEASABLE_MIN);
-  }, 1_200_000);
-});
+  }
+  relativeSds.sort((a, b) => a - b);
+  const median = relativeSds[Math.floor(signals / 2)];
+  console.log(
+    `of ${signals}: ${releasable} releasable, ${withinFivePercent} within 5 %, ${covered} inside 95 %, median sd ${(100 * median).toFixed(2)} %`,
+  );
+  return { signals, releasable, covered, withinFivePercent };
+}
