@@ -9,7 +9,7 @@ export interface GeneratedIsotopologue {
   readonly groups: readonly { readonly responseFactor: number; readonly decayPerSecond: number }[];
 }
 
-/** Most spins the dense propagator takes: blocks of 20 states, about a second for a FID of 16,384 samples. */
+/** Most spins the dense propagator takes: blocks of 20 states, 2 s for a FID of 16,384 samples (one of two cores, shared, 2026-12-01). */
 export const SPIN_COUNT_MAX = 6;
 
 /** When the samples are taken: sample n at (n - timeZeroSamples) dwellSeconds. */

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { generateSignal } from '../generate-signal.ts';
+import { feedBack } from './radiation-damping.ts';
 
 const LINES = [
   { amount: 3, shiftHz: -20, decayPerSecond: 2 },
@@ -69,6 +70,16 @@ function largestDifference(a: Float64Array, b: Float64Array): number {
 }
 
 describe('feedBack', () => {
+  it('steps two samples as by hand', () => {
+    // S(1) = (F(1) - g K(1) S(0) / 2) / (1 + g K(0) / 2), F = 1, i and K = i, 1: g = 2: (i - 1) / (1 + i) = i; g = i: (i - i / 2) / (1 / 2) = i.
+    const [free, answer] = [Float64Array.of(1, 0, 0, 1), Float64Array.of(0, 1, 1, 0)];
+    for (const gain of [
+      { decayPerSecond: 2, pullRadPerSecond: 0 },
+      { decayPerSecond: 0, pullRadPerSecond: 1 },
+    ])
+      expect([...feedBack(free, answer, { ...gain, ofSignal: 1, stepsPerSample: 1 }, 1)]).toEqual([1, 0, 0, 1]);
+  });
+
   it('broadens and pulls a lone line in proportion to its amplitude', () => {
     // Closed form of the law for one line: a exp((i w - R - k a) t), k a = (1.9 + 0.6 i) 3 / 2.
     const signal = damped([LINES[0]], { decayPerSecond: 1.9, pullRadPerSecond: 0.6 }, 1);
